@@ -1,0 +1,313 @@
+import type { Spin } from "../frame/spin.ts";
+import type { Deck } from "../layout/habitat.ts";
+import { type RingVec, ring } from "../vector/vec3.ts";
+import { type Contact, firstContact, type Stretch, TOUCHING } from "./contact.ts";
+import { DragPath } from "./drag-path.ts";
+import type { CoamingSurface, EdgePoint, Hatchway } from "./hatchway.ts";
+import { type Path, type State, StraightPath } from "./path.ts";
+import { ceilingSurface, CylinderFromWithin, CylinderFromWithout, floorSurface, Plane, type Surface, wallSurfaces } from "./surface.ts";
+import { bodySurfaces, paneAt, type World } from "./world.ts";
+
+/** A sphere let go at t = 0: ring position of its centre (m), velocity relative to the ring (m/s). */
+export interface Release {
+	/** Index of the deck whose bay it is in. */
+	readonly deck: number;
+	readonly position: RingVec;
+	readonly velocity: RingVec;
+	readonly diameter: number;
+	/** ½ ρ C_d A / m, 1/m; 0 is free flight. */
+	readonly drag: number;
+}
+
+export type Struck =
+	| { readonly kind: "deck" | "ceiling" | "end-low" | "end-high" | "side-low" | "side-high" | "coaming" | "element"; readonly id: string; readonly deck: number }
+	| { readonly kind: "outside" | "none" };
+
+export interface Flight {
+	readonly struck: Struck;
+	/** Of the strike, of leaving the last volume, or of giving up; s. */
+	readonly end: number;
+	readonly path: Path;
+	/** Ring state of the centre at `end`. */
+	readonly state: State;
+	/** The nearest point of the edge, where a coaming was struck. */
+	readonly edge: EdgePoint | null;
+	/** Hatches gone through, in order. */
+	readonly passed: readonly string[];
+}
+
+const NO_FIELD = ring(0, 0, 0);
+/** A flight is followed for 10 turns at the rate of its release, or 600 s where that is longer. */
+export const longestFlight = (rate: number): number => (rate > 0 ? Math.max(600, (20 * Math.PI) / rate) : 600);
+
+/** Where a released sphere goes and what it first strikes (mechanics: free flight). Bounce and roll are not modelled. */
+export function fly(world: World, spin: Spin, release: Release): Flight {
+	const flight = release.drag > 0 ? new Dragged(world, spin, release) : new Free(world, spin, release);
+	return flight.run();
+}
+
+type Place = { readonly kind: "bay"; readonly deck: number } | { readonly kind: "shaft"; readonly way: Hatchway; readonly down: boolean };
+
+/** The walk from bay to bay that free and dragged flight share; they differ in how the next contact is found. */
+abstract class Journey {
+	protected readonly half: number;
+	protected readonly bodies: readonly Surface[];
+	protected readonly until: number;
+	protected readonly state: State = new Float64Array(6);
+	private readonly passed: string[] = [];
+	abstract readonly path: Path;
+
+	constructor(
+		protected readonly world: World,
+		protected readonly spin: Spin,
+		protected readonly release: Release,
+	) {
+		this.half = release.diameter / 2;
+		this.bodies = world.bodies.length ? bodySurfaces(world, this.half) : [];
+		this.until = longestFlight(spin.rate(0));
+	}
+
+	/** The first contact after `from`; contacts in `leaving` count once they have opened. */
+	protected abstract next(surfaces: readonly Surface[], from: number, leaving: Set<Surface>): Contact | null;
+	/** The state at a contact, to full order. */
+	protected abstract settle(t: number): void;
+	/** A path must be known a little beyond the release to tell moving in from moving away. */
+	protected abstract begin(): void;
+
+	run(): Flight {
+		this.begin();
+		let place: Place = { kind: "bay", deck: this.release.deck };
+		let t = 0;
+		for (let hops = 0; hops < 10_000; hops++) {
+			const surfaces = this.surfacesOf(place);
+			const contact = this.next(surfaces, t, this.leavingAt(surfaces, t));
+			if (!contact) return this.finish({ kind: "none" }, this.until, null);
+			t = contact.t;
+			this.settle(t);
+			const { surface } = contact;
+			if (place.kind === "shaft") {
+				if (surface.kind === "far-end") {
+					this.passed.push(place.way.hatch.id);
+					const onward: number | null = place.down ? place.way.hatch.below : place.way.hatch.deck;
+					if (onward === null) return this.finish({ kind: "outside" }, t, null);
+					place = { kind: "bay", deck: onward };
+					continue;
+				}
+				if (surface.kind === "near-end") {
+					const back: number | null = place.down ? place.way.hatch.deck : place.way.hatch.below;
+					if (back === null) return this.finish({ kind: "outside" }, t, null);
+					place = { kind: "bay", deck: back };
+					continue;
+				}
+				if (surface.kind === "coaming")
+					return this.finish({ kind: "coaming", id: surface.id, deck: place.way.hatch.deck }, t, (surface as CoamingSurface).edge(this.state));
+				return this.strike(surface, place.way.hatch.deck, t);
+			}
+			const way = this.openingAt(surface, place.deck);
+			if (way && !way.hatch.solid) {
+				place = { kind: "shaft", way, down: surface.kind === "deck" };
+				continue;
+			}
+			if (way) return this.finish({ kind: "element", id: way.hatch.id, deck: place.deck }, t, null);
+			return this.strike(surface, place.deck, t);
+		}
+		throw new RangeError(`a flight went through more than 10000 hatch ends (t = ${t} s)`);
+	}
+
+	private strike(surface: Surface, deck: number, t: number): Flight {
+		if (surface.kind === "far-end" || surface.kind === "near-end") throw new RangeError(`a shaft end was struck in deck ${deck}`);
+		if (surface.kind !== "element" && surface.kind !== "coaming") {
+			const face = surface.kind === "deck" ? "floor" : surface.kind;
+			const pane = paneAt(this.world, this.world.habitat.decks[deck] as Deck, face, this.state);
+			if (pane) return this.finish({ kind: "element", id: pane.id, deck }, t, null);
+		}
+		return this.finish({ kind: surface.kind, id: surface.id, deck }, t, null);
+	}
+
+	private finish(struck: Struck, end: number, edge: EdgePoint | null): Flight {
+		if (struck.kind === "none") this.settle(end);
+		return { struck, end, path: this.path, state: this.state, edge, passed: this.passed };
+	}
+
+	/** The hatch through which a floor or ceiling contact is none, or null. */
+	private openingAt(surface: Surface, deck: number): Hatchway | null {
+		if (surface.kind !== "deck" && surface.kind !== "ceiling") return null;
+		const angle = Math.atan2(this.state[1] as number, this.state[0] as number);
+		for (const way of this.world.ways) {
+			const here = surface.kind === "deck" ? way.hatch.deck === deck : way.hatch.below === deck;
+			if (here && way.admits(angle, this.state[2] as number)) return way;
+		}
+		return null;
+	}
+
+	private surfacesOf(place: Place): readonly Surface[] {
+		const { half } = this;
+		if (place.kind === "bay") {
+			const deck = this.world.habitat.decks[place.deck] as Deck;
+			return [floorSurface(deck, half), ceilingSurface(deck, half), ...wallSurfaces(deck, half), ...this.bodies];
+		}
+		const { way, down } = place;
+		return [
+			way.outerEnd(half, down ? "far-end" : "near-end"),
+			way.innerEnd(half, down ? "near-end" : "far-end"),
+			...way.coaming(half),
+			...wallSurfaces(way.deck, half).map((wall) => new OnlyAbove(wall, floorSurface(way.deck, 0))),
+			...this.bodies,
+		];
+	}
+
+	/** Surfaces touched at t from which the body moves away or on which it rests. */
+	private leavingAt(surfaces: readonly Surface[], t: number): Set<Surface> {
+		const leaving = new Set<Surface>();
+		const s = this.state;
+		for (const surface of surfaces) {
+			this.path.stateAt(t, s);
+			if (surface.gap(s) > TOUCHING) continue;
+			const rate = surface.rate(s);
+			if (rate > 1e-12) leaving.add(surface);
+			else if (rate > -1e-12) {
+				this.path.stateAt(t + 1e-6, s);
+				surface.gap(s);
+				if (surface.rate(s) >= 0) leaving.add(surface);
+			}
+		}
+		return leaving;
+	}
+}
+
+/** A bulkhead of the bay above a hatch: it ends at the floor. */
+class OnlyAbove implements Surface {
+	readonly kind: Surface["kind"];
+	readonly id: string;
+	private above = true;
+	constructor(
+		private readonly wall: Surface,
+		private readonly floor: Surface,
+	) {
+		this.kind = wall.kind;
+		this.id = wall.id;
+	}
+	gap(s: State): number {
+		const height = this.floor.gap(s);
+		this.above = height >= 0;
+		return this.above ? this.wall.gap(s) : Math.max(-height, 1e-6);
+	}
+	rate(s: State): number {
+		return this.above ? this.wall.rate(s) : -Math.abs(this.floor.rate(s));
+	}
+	bend(b: Parameters<Surface["bend"]>[0]): number {
+		return this.above ? this.wall.bend(b) : this.floor.bend(b);
+	}
+}
+
+class Free extends Journey {
+	readonly path: StraightPath;
+	private readonly stretch: Stretch;
+	constructor(world: World, spin: Spin, release: Release) {
+		super(world, spin, release);
+		this.path = new StraightPath(spin, release.position, release.velocity);
+		this.stretch = { path: this.path, spin, inertialSpeed: this.path.inertialSpeed, inertialAcceleration: 0 };
+	}
+	protected begin(): void {}
+	protected settle(t: number): void {
+		this.path.stateAt(t, this.state);
+	}
+
+	/** Cylinders and ends by their roots; what turns with the ring by advancing to the least of those at most. */
+	protected next(surfaces: readonly Surface[], from: number, leaving: Set<Surface>): Contact | null {
+		let best: Contact | null = null;
+		let to = this.until;
+		const turning: Surface[] = [];
+		for (const surface of surfaces) {
+			const t = straightRoot(this.path, surface, from, leaving.has(surface));
+			if (t === undefined) turning.push(surface);
+			else if (t < to) {
+				to = t;
+				best = { surface, t };
+			}
+		}
+		return (turning.length ? firstContact(this.stretch, turning, from, to, leaving) : null) ?? best;
+	}
+}
+
+/** The first contact of a straight inertial line with a surface of revolution or an end, in closed form; undefined for any other surface. */
+function straightRoot(path: StraightPath, surface: Surface, from: number, leaving: boolean): number | undefined {
+	if (surface instanceof Plane) {
+		if (surface.nx !== 0 || surface.ny !== 0) return undefined;
+		const rate = surface.nz * path.uz;
+		if (!(rate < 0)) return Number.POSITIVE_INFINITY;
+		return Math.max(from, (surface.nz * path.pz + surface.offset) / -rate);
+	}
+	const within = surface instanceof CylinderFromWithin;
+	if (!within && !(surface instanceof CylinderFromWithout)) return undefined;
+	const x = path.px + path.ux * from;
+	const y = path.py + path.uy * from;
+	const a = path.ux * path.ux + path.uy * path.uy;
+	if (a === 0) return Number.POSITIVE_INFINITY;
+	const b = x * path.ux + y * path.uy;
+	const r = Math.hypot(x, y);
+	const c = (r - surface.reach) * (r + surface.reach);
+	const root = Math.sqrt(Math.max(0, b * b - a * c));
+	if (within) {
+		if (leaving && b >= 0) return Number.POSITIVE_INFINITY;
+		return from + Math.max(0, b > 0 ? -c / (b + root) : (root - b) / a);
+	}
+	if (b >= 0 || leaving || b * b < a * c) return Number.POSITIVE_INFINITY;
+	return from + Math.max(0, c / (root - b));
+}
+
+class Dragged extends Journey {
+	readonly path: DragPath;
+	constructor(world: World, spin: Spin, release: Release) {
+		super(world, spin, release);
+		this.path = new DragPath(spin, release.position, release.velocity, release.drag, NO_FIELD);
+	}
+	protected begin(): void {
+		this.path.advance(this.until);
+	}
+	protected settle(t: number): void {
+		this.path.exactStateAt(t, this.state);
+	}
+
+	protected next(surfaces: readonly Surface[], from: number, leaving: Set<Surface>): Contact | null {
+		return firstDragContact(this.path, surfaces, from, this.until, leaving);
+	}
+}
+
+/** First contact along a dragged path, advancing it as needed; polished on the full-order state. */
+export function firstDragContact(path: DragPath, surfaces: readonly Surface[], from: number, until: number, leaving: Set<Surface>): Contact | null {
+	const s = new Float64Array(6);
+	let t = from;
+	while (t < until) {
+		if (path.known <= t) path.advance(until - t + 1e-9);
+		const to = Math.min(path.known, until);
+		path.stateAt(t, s);
+		const speed = path.stepSpeed(t) + 0.05 + Math.hypot(path.field[0], path.field[1], path.field[2]) * (to - t);
+		const air = speed + path.spin.greatestRate * (Math.hypot(s[0] as number, s[1] as number) + speed * (to - t));
+		const stretch: Stretch = {
+			path,
+			spin: path.spin,
+			inertialSpeed: speed + path.drag * air * air * (to - t),
+			inertialAcceleration: path.drag * air * air + Math.hypot(path.field[0], path.field[1], path.field[2]),
+		};
+		const contact = firstContact(stretch, surfaces, t, to, leaving);
+		if (contact) return { surface: contact.surface, t: polish(path, contact, s, from, to) };
+		t = to;
+	}
+	return null;
+}
+
+function polish(path: DragPath, contact: Contact, s: State, from: number, to: number): number {
+	let t = contact.t;
+	for (let i = 0; i < 4; i++) {
+		path.exactStateAt(t, s);
+		const gap = contact.surface.gap(s);
+		const rate = contact.surface.rate(s);
+		if (!(rate < 0)) break;
+		const step = -gap / rate;
+		if (Math.abs(step) > 1e-5) break;
+		t = Math.min(to, Math.max(from, t + step));
+		if (Math.abs(step) < 1e-13) break;
+	}
+	return t;
+}
