@@ -1,6 +1,4 @@
 // @ts-check
-import { ensureBuilt, ensureInstalled } from "./house.mjs";
+import { prepare } from "./house.mjs";
 
-await ensureInstalled();
-await ensureBuilt("app", { force: true });
-await ensureBuilt("cli", { force: true });
+await prepare({ builds: ["app", "cli"], force: true });

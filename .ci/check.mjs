@@ -1,7 +1,7 @@
 // @ts-check
-import { ensureInstalled, runNode, say } from "./house.mjs";
+import { prepare, runNode, say } from "./house.mjs";
 
-await ensureInstalled();
+await prepare();
 /** @type {[string, string, string[]][]} */
 const checks = [
 	["types of the core", "node_modules/typescript/bin/tsc", ["-p", "tsconfig.json"]],

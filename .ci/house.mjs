@@ -2,7 +2,19 @@
 // What every entry needs before the packages are there: Node's own modules only.
 import { spawn } from "node:child_process";
 import { createHash } from "node:crypto";
-import { existsSync, mkdirSync, readdirSync, readFileSync, renameSync, rmSync, statSync, utimesSync, writeFileSync } from "node:fs";
+import {
+	chmodSync,
+	copyFileSync,
+	existsSync,
+	mkdirSync,
+	readdirSync,
+	readFileSync,
+	renameSync,
+	rmSync,
+	statSync,
+	utimesSync,
+	writeFileSync,
+} from "node:fs";
 import { dirname, join } from "node:path";
 import { fileURLToPath } from "node:url";
 
@@ -132,12 +144,12 @@ export async function ensureInstalled() {
 		if (installed()) return;
 		say("installing packages from package-lock.json");
 		const args = ["ci", "--include=dev", "--no-audit", "--no-fund", "--loglevel=error"];
-		const npm = process.env["npm_execpath"];
+		const npm = process.env.npm_execpath;
 		const status = npm?.endsWith(".js")
 			? await run(process.execPath, [npm, ...args])
 			: await run(process.platform === "win32" ? "npm.cmd" : "npm", args);
-		if (status !== 0) refuse(`npm ci ended with status ${status}`);
-		if (!installed()) refuse("npm ci did not install what package-lock.json lists");
+		if (status !== 0) throw new Error(`npm ci ended with status ${status}`);
+		if (!installed()) throw new Error("npm ci did not install what package-lock.json lists");
 	});
 }
 
@@ -191,10 +203,13 @@ export async function ensureBuilt(name, { force = false } = {}) {
 			["build", ...args, "--outDir", staging, "--emptyOutDir", "--logLevel", "warn"],
 			{ env },
 		);
-		if (status !== 0) refuse(`the build of ${output} ended with status ${status}`);
+		if (status !== 0) throw new Error(`the build of ${output} ended with status ${status}`);
 		mkdirSync(join(root, "dist"), { recursive: true });
-		if (name === "cli") renameSync(join(staging, output), target);
-		else {
+		if (name === "cli") {
+			chmodSync(join(staging, output), 0o755);
+			renameSync(join(staging, output), target);
+		} else {
+			for (const notice of ["LICENSE", "THIRD-PARTY.md"]) copyFileSync(join(root, notice), join(staging, notice));
 			const old = join(cache, `old-${name}`);
 			rmSync(old, { recursive: true, force: true });
 			if (existsSync(target)) renameSync(target, old);
@@ -204,4 +219,17 @@ export async function ensureBuilt(name, { force = false } = {}) {
 		writeFileSync(stampFile, stamp);
 		return target;
 	});
+}
+
+/**
+ * For the scripts of package.json: packages, then builds, or the reason why not and status 1.
+ * @param {{ builds?: ("app" | "cli")[], force?: boolean }} [options]
+ */
+export async function prepare({ builds = [], force = false } = {}) {
+	try {
+		await ensureInstalled();
+		for (const name of builds) await ensureBuilt(name, { force });
+	} catch (error) {
+		refuse(error instanceof Error ? error.message : String(error));
+	}
 }

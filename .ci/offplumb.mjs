@@ -1,10 +1,11 @@
 // @ts-check
+import { join } from "node:path";
 import { pathToFileURL } from "node:url";
-import { ensureBuilt, ensureInstalled } from "./house.mjs";
+import { prepare, root } from "./house.mjs";
 
-await ensureInstalled();
-const bundle = await ensureBuilt("cli");
+await prepare({ builds: ["cli"] });
+const bundle = join(root, "dist/offplumb.mjs");
 // npm moves to the checkout; paths on the command line are meant from where the user stands.
-process.chdir(process.env["INIT_CWD"] ?? process.cwd());
+process.chdir(process.env.INIT_CWD ?? process.cwd());
 process.argv[1] = bundle;
 await import(pathToFileURL(bundle).href);

@@ -1,5 +1,5 @@
 // @ts-check
-import { ensureInstalled, runNode } from "./house.mjs";
+import { prepare, runNode } from "./house.mjs";
 
-await ensureInstalled();
+await prepare();
 process.exitCode = await runNode("node_modules/vitest/vitest.mjs", ["run", ...process.argv.slice(2)], { stdout: "inherit" });
