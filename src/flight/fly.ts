@@ -21,7 +21,8 @@ export interface Release {
 
 export type Struck =
 	| { readonly kind: "deck" | "ceiling" | "end-low" | "end-high" | "side-low" | "side-high" | "coaming" | "element"; readonly id: string; readonly deck: number }
-	| { readonly kind: "outside" | "none" };
+	| { readonly kind: "outside" }
+	| { readonly kind: "none" };
 
 export interface Flight {
 	readonly struck: Struck;

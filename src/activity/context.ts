@@ -1,0 +1,22 @@
+import type { World } from "../flight/world.ts";
+import type { Spin } from "../frame/spin.ts";
+import type { Habitat } from "../layout/habitat.ts";
+
+/** What every activity is computed in: one habitat, one spin, one person. SI. */
+export interface Context {
+	readonly habitat: Habitat;
+	readonly world: World;
+	/** Its time 0 is the activity's. */
+	readonly spin: Spin;
+	/** The phase, and whether its rate changes during the activity. */
+	readonly phase: string;
+	readonly person: Person;
+}
+
+export interface Person {
+	readonly id: string;
+	/** m */
+	readonly stature: number;
+	/** kg */
+	readonly mass: number;
+}
