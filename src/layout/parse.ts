@@ -1,4 +1,4 @@
-import { checkLayout } from "./check.ts";
+import { checkLayout } from "./check/layout.ts";
 import { explain } from "./explain.ts";
 import { migrate } from "./migrate.ts";
 import { partsOf, readParts } from "./parts.ts";

@@ -33,6 +33,9 @@ export interface Parts<T> {
 	readonly path: string;
 	readonly entries: readonly Part<T>[];
 	readonly ids: readonly Part<string>[];
+	readonly known: ReadonlySet<string>;
+	/** The first readable entry of an id. */
+	readonly byId: ReadonlyMap<string, T>;
 	/** Whether every entry could be read. */
 	readonly whole: boolean;
 	/** Whether it is a list at all: if not, nothing that refers to it can be judged. */
@@ -47,6 +50,7 @@ export interface LayoutParts {
 	readonly elements: Parts<ElementFile>;
 	readonly crew: Parts<CrewMember>;
 	readonly activities: Parts<ActivityFile>;
+	readonly use: readonly Part<string>[];
 	readonly own: Parts<CriterionOwn>;
 	readonly tailor: Parts<Tailoring>;
 	/** Null where they stand but cannot be read. */
@@ -59,18 +63,24 @@ const get = (value: unknown, key: string): unknown =>
 	typeof value === "object" && value !== null && Object.hasOwn(value, key) ? (value as Record<string, unknown>)[key] : undefined;
 
 function listOf<T>(read: Read, schema: z.ZodType<T>, list: unknown, path: string): Parts<T> {
-	if (list === undefined) return { path, entries: [], ids: [], whole: true, present: true };
-	if (!Array.isArray(list)) return { path, entries: [], ids: [], whole: false, present: false };
 	const entries: Part<T>[] = [];
 	const ids: Part<string>[] = [];
-	for (const [i, item] of list.entries()) {
+	const byId = new Map<string, T>();
+	for (const [i, item] of (Array.isArray(list) ? list : []).entries()) {
 		const value = read(schema, item);
 		if (value !== undefined) entries.push({ path: below(path, i), value });
 		const id = get(item, "id");
-		if (typeof id === "string") ids.push({ path: below(below(path, i), "id"), value: id });
+		if (typeof id !== "string") continue;
+		ids.push({ path: below(below(path, i), "id"), value: id });
+		if (value !== undefined && !byId.has(id)) byId.set(id, value);
 	}
-	return { path, entries, ids, whole: entries.length === list.length, present: true };
+	const present = list === undefined || Array.isArray(list);
+	const whole = present && (list === undefined || entries.length === list.length);
+	return { path, entries, ids, known: new Set(ids.map((i) => i.value)), byId, whole, present };
 }
+
+const stringsOf = (list: unknown, path: string): Part<string>[] =>
+	Array.isArray(list) ? list.flatMap((value, i) => (typeof value === "string" ? [{ path: below(path, i), value }] : [])) : [];
 
 function parts(file: unknown, read: Read): LayoutParts {
 	const habitat = get(file, "habitat");
@@ -84,6 +94,7 @@ function parts(file: unknown, read: Read): LayoutParts {
 		elements: listOf<ElementFile>(read, element, get(file, "elements"), "elements"),
 		crew: listOf(read, crewMember, get(file, "crew"), "crew"),
 		activities: listOf<ActivityFile>(read, activity, get(file, "activities"), "activities"),
+		use: stringsOf(get(criteria, "use"), "criteria.use"),
 		own: listOf(read, ownCriterion, get(criteria, "own"), "criteria.own"),
 		tailor: listOf(read, tailoring, get(criteria, "tailor"), "criteria.tailor"),
 		assumptions: overrides === undefined ? {} : (read(assumptions, overrides) ?? null),

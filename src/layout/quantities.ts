@@ -42,7 +42,7 @@ export const QUANTITY = {
 	frequency: { unit: "per day", min: 0, max: 86_400 },
 	threshold: { unit: "deg/s", min: 0, max: 1_000, above: true },
 	canalTau: { unit: "s", min: 0.1, max: 1_000 },
-	canalTauShort: { unit: "s", min: 0.0001, max: 0.1 },
+	canalTauShort: { unit: "s", min: 0.0001, max: 0.05 },
 	adaptationTau: { unit: "s", min: 1, max: 10_000 },
 	bodyFraction: { unit: "", min: 0.1, max: 1 },
 	standoff: { unit: "m", min: 0, max: 2 },
