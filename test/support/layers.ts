@@ -15,7 +15,7 @@ const core = ["quantity", "vector", "frame", "layout", "flight", "vestibular", "
 const below = (layer: string): string[] => core.slice(0, core.indexOf(layer));
 const drawn = ["quantity", "vector", "frame", "layout", "body", "sky", "activity"];
 
-/** Layer of the core -> layers it may import. `assess` is the file src/assess.ts. */
+/** Layer of the core -> layers it may import. `assess` is the file src/assess.ts, `assessment` src/assessment.ts. */
 export const coreRule: Readonly<Record<string, readonly string[]>> = {
 	quantity: [],
 	vector: below("vector"),
@@ -27,14 +27,15 @@ export const coreRule: Readonly<Record<string, readonly string[]>> = {
 	body: below("flight"),
 	activity: below("activity"),
 	criteria: [...below("flight"), "activity"],
-	assess: core,
-	placement: [...core, "assess"],
+	assessment: core,
+	assess: [...core, "assessment"],
+	placement: [...core, "assessment", "assess"],
 	shape: drawn,
 	drawing: drawn,
 	raster: ["shape"],
 	history: ["layout"],
-	sheet: ["assess", "drawing", "raster"],
-	cli: [...core, "assess", "placement", "shape", "drawing", "raster", "history", "sheet"],
+	sheet: ["assessment", "assess", "drawing", "raster"],
+	cli: [...core, "assessment", "assess", "placement", "shape", "drawing", "raster", "history", "sheet"],
 };
 
 /** Packages that a layer of the core may import; no other layer imports any. */
