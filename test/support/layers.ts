@@ -15,7 +15,7 @@ const core = ["quantity", "vector", "frame", "layout", "flight", "vestibular", "
 const below = (layer: string): string[] => core.slice(0, core.indexOf(layer));
 const drawn = ["quantity", "vector", "frame", "layout", "body", "sky", "activity"];
 
-/** Layer of the core -> layers it may import. `assess` is the file src/assess.ts, `assessment` src/assessment.ts. */
+/** Layer of the core -> layers it may import. `assess` is the file src/assess.ts, and so on. */
 export const coreRule: Readonly<Record<string, readonly string[]>> = {
 	quantity: [],
 	vector: below("vector"),
@@ -27,15 +27,16 @@ export const coreRule: Readonly<Record<string, readonly string[]>> = {
 	body: below("flight"),
 	activity: below("activity"),
 	criteria: [...below("flight"), "activity"],
-	assessment: core,
-	assess: [...core, "assessment"],
-	placement: [...core, "assessment", "assess"],
+	assess: core,
+	series: [...core, "assess"],
+	assessment: [...core, "assess", "series"],
+	placement: [...core, "assess", "assessment"],
 	shape: drawn,
 	drawing: drawn,
 	raster: ["shape"],
 	history: ["layout"],
-	sheet: ["assessment", "assess", "drawing", "raster"],
-	cli: [...core, "assessment", "assess", "placement", "shape", "drawing", "raster", "history", "sheet"],
+	sheet: ["assess", "series", "assessment", "drawing", "raster"],
+	cli: [...core, "assess", "series", "assessment", "placement", "shape", "drawing", "raster", "history", "sheet"],
 };
 
 /** Packages that a layer of the core may import; no other layer imports any. */
