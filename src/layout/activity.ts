@@ -1,58 +1,58 @@
-import * as z from "zod";
-import { flag, id, list, number, oneOrSeveral, text, word } from "./field.ts";
+import * as z from "zod/mini";
+import { flag, id, list, number, object, oneOrSeveral, optional, text, word } from "./field.ts";
 import { QUANTITY } from "./quantities.ts";
 
 /** What the crew does: one object per kind. */
 
 const angle = number(QUANTITY.angle, "Ring angle of the floor point");
 const axial = number(QUANTITY.axial, "Position along the spin axis");
-const height = (what: string) => number(QUANTITY.size, `Height of ${what} above the floor`);
 const heading = number(QUANTITY.angle, "Heading from prograde towards axial");
 const elevation = number(QUANTITY.latitude, "Elevation above the floor plane");
 const duration = number(QUANTITY.duration, "Duration");
 const deck = id("Deck it is on");
-const floorPlace = z.strictObject({ deck, angle_deg: angle, axial_m: axial }).meta({ description: "Where the feet are" });
+const floorPlace = object({ deck, angle_deg: angle, axial_m: axial }, "Where the feet are");
+const abovePlace = (what: string, description: string) =>
+	object({ deck, angle_deg: angle, axial_m: axial, height_m: number(QUANTITY.size, `Height of ${what} above the floor`) }, description);
 
-const task = z
-	.strictObject({
+const task = object(
+	{
 		name: text("What the task is"),
 		frequency_per_day: number(QUANTITY.frequency, "How often"),
 		criticality: word(["routine", "important", "critical"], "What depends on it"),
 		clothing: word(["light", "bulky"], "What is worn"),
 		requirements: list(text("Identifier of a requirement"), "Requirements it traces to"),
 		owner: text("Who answers for it"),
-	})
-	.meta({ description: "The task it stands for, for traceability" });
+	},
+	"The task it stands for, for traceability",
+);
 
 const name = <const K extends string>(kind: K) => ({ id: id("Name of the activity"), kind: word([kind], "Kind of activity") });
 const who = {
 	crew: oneOrSeveral(id("Crew member"), "Crew member or several, each a case"),
-	phase: oneOrSeveral(id("Phase"), "Phase or several, each a case; absent: nominal").exactOptional(),
-	start_s: number(QUANTITY.time, "Where on the spin profile it begins; absent: 0").exactOptional(),
+	phase: optional(oneOrSeveral(id("Phase"), "Phase or several, each a case; absent: nominal")),
+	start_s: optional(number(QUANTITY.time, "Where on the spin profile it begins; absent: 0")),
 };
 const head = <const K extends string>(kind: K) => ({ ...name(kind), ...who });
-const tail = { task: task.exactOptional() };
+const tail = { task: optional(task) };
 
 const drop = z.strictObject({
 	...head("drop"),
-	from: z
-		.strictObject({ deck, angle_deg: angle, axial_m: axial, height_m: height("the object's centre") })
-		.meta({ description: "Where it is let go" }),
-	feet: z
-		.strictObject({ angle_deg: angle, axial_m: axial, facing_deg: heading })
-		.meta({ description: "Where the person stands, on the deck of `from`" })
-		.exactOptional(),
-	release: z
-		.strictObject({ speed_mps: number(QUANTITY.speed, "Speed relative to the ring"), heading_deg: heading, elevation_deg: elevation })
-		.meta({ description: "How it is tossed; absent: let go at rest" })
-		.exactOptional(),
-	object: z
-		.strictObject({
+	from: abovePlace("the object's centre", "Where it is let go"),
+	feet: optional(object({ angle_deg: angle, axial_m: axial, facing_deg: heading }, "Where the person stands, on the deck of `from`")),
+	release: optional(
+		object(
+			{ speed_mps: number(QUANTITY.speed, "Speed relative to the ring"), heading_deg: heading, elevation_deg: elevation },
+			"How it is tossed; absent: let go at rest",
+		),
+	),
+	object: object(
+		{
 			mass_kg: number(QUANTITY.mass, "Mass, above 0"),
 			diameter_m: number(QUANTITY.size, "Diameter of the sphere it is taken for"),
 			drag_coefficient: number(QUANTITY.dragCoefficient, "Drag coefficient"),
-		})
-		.meta({ description: "What is let go" }),
+		},
+		"What is let go",
+	),
 	drag: flag("Whether the air slows it"),
 	...tail,
 });
@@ -64,9 +64,9 @@ const walk = z.strictObject({
 	axial_m: axial,
 	heading_deg: heading,
 	speed_mps: number(QUANTITY.speed, "Walking speed"),
-	start_mps2: number(QUANTITY.acceleration, "Acceleration of starting and stopping; absent: 1.0").exactOptional(),
-	turn_radius_m: number(QUANTITY.turnRadius, "Radius of a turn; absent: no turn").exactOptional(),
-	distance_m: number(QUANTITY.distance, "How far; absent: to the deck's edge").exactOptional(),
+	start_mps2: optional(number(QUANTITY.acceleration, "Acceleration of starting and stopping; absent: 1.0")),
+	turn_radius_m: optional(number(QUANTITY.turnRadius, "Radius of a turn; absent: no turn")),
+	distance_m: optional(number(QUANTITY.distance, "How far; absent: to the deck's edge")),
 	...tail,
 });
 
@@ -75,7 +75,7 @@ const climb = z.strictObject({
 	ladder: id("Ladder climbed"),
 	way: word(["up", "down"], "Which way"),
 	speed_mps: number(QUANTITY.climbSpeed, "Climbing speed"),
-	load_kg: number(QUANTITY.load, "Load carried; absent: 0").exactOptional(),
+	load_kg: optional(number(QUANTITY.load, "Load carried; absent: 0")),
 	...tail,
 });
 
@@ -91,14 +91,12 @@ const sitStand = z.strictObject({
 
 const reach = z.strictObject({
 	...head("reach"),
-	at: z
-		.strictObject({ deck, angle_deg: angle, axial_m: axial, height_m: height("the hand") })
-		.meta({ description: "Where the hand starts" }),
+	at: abovePlace("the hand", "Where the hand starts"),
 	distance_m: number(QUANTITY.size, "Length of the reach"),
 	duration_s: duration,
 	heading_deg: heading,
 	elevation_deg: elevation,
-	load_kg: number(QUANTITY.load, "Load in the hand; absent: 0").exactOptional(),
+	load_kg: optional(number(QUANTITY.load, "Load in the hand; absent: 0")),
 	...tail,
 });
 
@@ -115,7 +113,7 @@ const headTurn = z.strictObject({
 const windowView = z.strictObject({
 	...head("window-view"),
 	window: id("Window looked through"),
-	eye: z.strictObject({ deck, angle_deg: angle, axial_m: axial, height_m: height("the eye") }).meta({ description: "Where the eye is" }),
+	eye: abovePlace("the eye", "Where the eye is"),
 	...tail,
 });
 

@@ -1,12 +1,12 @@
-import * as z from "zod";
-import { flag, id, number, word } from "./field.ts";
+import * as z from "zod/mini";
+import { flag, id, number, optional, word } from "./field.ts";
 import { QUANTITY } from "./quantities.ts";
 
 /** Elements: what is fixed in the bays. An opening is a rectangle or a circle; a window says on which surface it lies. */
 
 const head = { id: id("Name of the element") };
 const deck = id("Deck it is on");
-const solid = flag("What flies strikes it; absent: false").exactOptional();
+const solid = optional(flag("What flies strikes it; absent: false"));
 const angle = number(QUANTITY.angle, "Ring angle of its centre, positive the way the floor moves");
 const axial = number(QUANTITY.axial, "Position of its centre along the spin axis");
 const height = number(QUANTITY.size, "Height of its centre above the floor");

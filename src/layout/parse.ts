@@ -1,3 +1,4 @@
+import * as z from "zod/mini";
 import { checkLayout } from "./check/layout.ts";
 import { explain } from "./explain.ts";
 import { migrate } from "./migrate.ts";
@@ -9,11 +10,15 @@ import { type LayoutFile, layoutSchema } from "./schema.ts";
 export type ParseResult =
 	| { readonly ok: true; readonly layout: LayoutFile }
 	| { readonly ok: false; readonly problems: readonly Problem[] };
+export type DecodeResult = { readonly ok: true; readonly text: string } | { readonly ok: false; readonly problems: readonly Problem[] };
+
+/** So many problems are told; a file with more is not one that was written by hand, and the list says that it goes on. */
+export const MOST_PROBLEMS = 1000;
 
 declare const TextDecoder: new (label: string, options: { fatal: boolean }) => { decode(bytes: Uint8Array): string };
 
 /** The text of a file's bytes, without a byte order mark; refused where too long or not UTF-8. */
-export function decodeLayout(bytes: Uint8Array): { ok: true; text: string } | { ok: false; problems: Problem[] } {
+export function decodeLayout(bytes: Uint8Array): DecodeResult {
 	if (bytes.length > MOST_BYTES) {
 		return { ok: false, problems: [{ path: WHOLE_FILE, value: `${bytes.length} bytes`, expected: `at most ${MOST_BYTES} bytes` }] };
 	}
@@ -29,18 +34,46 @@ export function parseLayout(text: string): ParseResult {
 	const body = text.startsWith("\uFEFF") ? text.slice(1) : text;
 	const scan = scanJson(body);
 	if (!scan.readable) return { ok: false, problems: scan.problems };
-	const result = validateLayout(JSON.parse(body));
-	if (scan.problems.length === 0) return result;
-	return { ok: false, problems: result.ok ? scan.problems : [...scan.problems, ...result.problems] };
+	return judge(JSON.parse(body), scan.problems);
 }
 
 /** The same for a value: what an edit or a reader of JSON holds. The value is not changed. */
-export function validateLayout(value: unknown): ParseResult {
+export const validateLayout = (value: unknown): ParseResult => judge(value, []);
+
+const FIRST_FAULT: z.core.ParseContextInternal<z.core.$ZodIssue> = { abortEarly: true };
+
+function judge(value: unknown, found: Iterable<Problem>): ParseResult {
 	const migrated = migrate(value);
 	if (!migrated.ok) return migrated;
-	const parsed = layoutSchema.safeParse(migrated.value);
-	const problems = parsed.success ? [] : explain(layoutSchema, migrated.value);
-	if (!parsed.success && problems.length === 0) throw new Error(`refused without a reason: ${parsed.error.message}`);
-	problems.push(...checkLayout(parsed.success ? partsOf(parsed.data) : readParts(migrated.value)));
-	return parsed.success && problems.length === 0 ? { ok: true, layout: parsed.data } : { ok: false, problems };
+	const parsed = z.safeParse(layoutSchema, migrated.value, FIRST_FAULT);
+	const problems = parsed.success
+		? atMost(MOST_PROBLEMS, found, checkLayout(partsOf(parsed.data)))
+		: atMost(
+				MOST_PROBLEMS,
+				found,
+				explain(layoutSchema, migrated.value),
+				lazily(() => checkLayout(readParts(migrated.value))),
+			);
+	if (problems.length > 0) return { ok: false, problems };
+	if (!parsed.success) throw new Error(`a layout was refused without a reason: ${parsed.error.message}`);
+	return { ok: true, layout: parsed.data };
+}
+
+function* lazily<T>(make: () => Iterable<T>): Generator<T> {
+	yield* make();
+}
+
+/** The problems in turn, and no work for those beyond the most that are told. */
+function atMost(most: number, ...sources: readonly Iterable<Problem>[]): Problem[] {
+	const problems: Problem[] = [];
+	for (const source of sources) {
+		for (const p of source) {
+			if (problems.length >= most) {
+				problems.push({ path: WHOLE_FILE, value: `more than ${most} problems`, expected: "these put right first" });
+				return problems;
+			}
+			problems.push(p);
+		}
+	}
+	return problems;
 }

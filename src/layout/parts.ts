@@ -1,4 +1,4 @@
-import * as z from "zod";
+import * as z from "zod/mini";
 import { activity } from "./activity.ts";
 import { element } from "./element.ts";
 import { below } from "./problem.ts";
@@ -57,12 +57,12 @@ export interface LayoutParts {
 	readonly assumptions: AssumptionOverrides | null;
 }
 
-type Read = <T>(schema: z.ZodType<T>, value: unknown) => T | undefined;
+type Read = <T>(schema: z.core.$ZodType<T>, value: unknown) => T | undefined;
 
 const get = (value: unknown, key: string): unknown =>
 	typeof value === "object" && value !== null && Object.hasOwn(value, key) ? (value as Record<string, unknown>)[key] : undefined;
 
-function listOf<T>(read: Read, schema: z.ZodType<T>, list: unknown, path: string): Parts<T> {
+function listOf<T>(read: Read, schema: z.core.$ZodType<T>, list: unknown, path: string): Parts<T> {
 	const entries: Part<T>[] = [];
 	const ids: Part<string>[] = [];
 	const byId = new Map<string, T>();
@@ -102,7 +102,8 @@ function parts(file: unknown, read: Read): LayoutParts {
 }
 
 /** The parts of a layout that the schema has accepted. */
-export const partsOf = (layout: LayoutFile): LayoutParts => parts(layout, <T>(_: z.ZodType<T>, value: unknown) => value as T | undefined);
+export const partsOf = (layout: LayoutFile): LayoutParts =>
+	parts(layout, <T>(_: z.core.$ZodType<T>, value: unknown) => value as T | undefined);
 
 /** The readable parts of a file that the schema has refused. */
 export const readParts = (file: unknown): LayoutParts => parts(file, (schema, value) => z.safeParse(schema, value).data);

@@ -5,15 +5,17 @@ export const MOST_BYTES = 4 * 1024 * 1024;
 /** Objects and lists within one another at most. */
 export const MOST_DEPTH = 32;
 
-/** UTF-8 length of a text, counted only until it exceeds `MOST_BYTES`. */
-function byteLength(text: string): number {
+const BEYOND_ASCII = /[^\0-\x7f]/;
+
+function tooLong(text: string): boolean {
+	if (text.length > MOST_BYTES) return true;
+	if (text.length * 3 <= MOST_BYTES || !BEYOND_ASCII.test(text)) return false;
 	let bytes = text.length;
-	if (bytes > MOST_BYTES) return bytes;
 	for (let i = 0; i < text.length; i++) {
 		const c = text.charCodeAt(i);
 		if (c > 0x7f) bytes += c > 0x7ff && (c < 0xd800 || c > 0xdfff) ? 2 : 1;
 	}
-	return bytes;
+	return bytes > MOST_BYTES;
 }
 
 const NUMBER = /-?(?:0|[1-9]\d*)(?:\.\d+)?(?:[eE][+-]?\d+)?/y;
@@ -43,8 +45,11 @@ export interface Scan {
  * keeps one of them and drops the other.
  */
 export function scanJson(text: string): Scan {
-	if (byteLength(text) > MOST_BYTES) {
-		return { readable: false, problems: [{ path: WHOLE_FILE, value: "too long", expected: `at most ${MOST_BYTES} bytes` }] };
+	if (tooLong(text)) {
+		return {
+			readable: false,
+			problems: [{ path: WHOLE_FILE, value: `${text.length} characters`, expected: `at most ${MOST_BYTES} bytes` }],
+		};
 	}
 	const problems: Problem[] = [];
 	let at = 0;

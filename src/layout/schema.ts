@@ -1,7 +1,7 @@
-import * as z from "zod";
+import * as z from "zod/mini";
 import { ACTIVITY_KINDS, activity } from "./activity.ts";
 import { ELEMENT_KINDS, element, type hatch, type ladder, type window, type workstation } from "./element.ts";
-import { id, list, number, oneOrSeveral, text, word } from "./field.ts";
+import { described, filled, id, list, number, object, oneOrSeveral, optional, text, word } from "./field.ts";
 import { QUANTITY } from "./quantities.ts";
 
 /**
@@ -29,43 +29,57 @@ export const deck = z.strictObject({
 	radius_m: number(QUANTITY.radius, "Distance of the floor from the spin axis"),
 	...span("the bay"),
 	headroom_m: number(QUANTITY.extent, "Floor to ceiling"),
-	walkways: list(walkway, "Where people walk").exactOptional(),
+	walkways: optional(list(walkway, "Where people walk")),
 });
 
 export const phase = z.strictObject({ id: id("Name of the phase, not nominal"), rate_rpm: number(QUANTITY.rate, "Constant spin rate") });
 
 export const spinPoint = z.strictObject({ t_s: number(QUANTITY.time, "Time"), rate_rpm: number(QUANTITY.rate, "Spin rate") });
 
-export const spin = z.strictObject({
-	rate_rpm: number(QUANTITY.rate, "Spin rate of the phase nominal"),
-	profile: z
-		.array(spinPoint, { error: "a list" })
-		.min(1, { error: "at least one point" })
-		.meta({ description: "Replaces the constant nominal rate: points joined by minimum-jerk ramps, held beyond the ends" })
-		.exactOptional(),
-});
+export const spin = object(
+	{
+		rate_rpm: number(QUANTITY.rate, "Spin rate of the phase nominal"),
+		profile: optional(
+			filled(
+				spinPoint,
+				"at least one point",
+				"Replaces the constant nominal rate: points joined by minimum-jerk ramps, held beyond the ends",
+			),
+		),
+	},
+	"Spin in the phase nominal",
+);
 
-const air = z.strictObject({
-	pressure_kPa: number(QUANTITY.pressure, "Pressure"),
-	temperature_C: number(QUANTITY.temperature, "Temperature"),
-	oxygen_fraction: number(QUANTITY.fraction, "Oxygen by volume, rest nitrogen, dry"),
-});
+const air = object(
+	{
+		pressure_kPa: number(QUANTITY.pressure, "Pressure"),
+		temperature_C: number(QUANTITY.temperature, "Temperature"),
+		oxygen_fraction: number(QUANTITY.fraction, "Oxygen by volume, rest nitrogen, dry"),
+	},
+	"Air, turning with the ring",
+);
 
-const sky = z.strictObject({
-	axis_ra_deg: number(QUANTITY.angle, "Right ascension of the spin vector"),
-	axis_dec_deg: number(QUANTITY.latitude, "Declination of the spin vector"),
-	zero_deg: number(QUANTITY.angle, "Where ring angle 0 stands at t = 0"),
-	sun_ra_deg: number(QUANTITY.angle, "Right ascension of the Sun"),
-	sun_dec_deg: number(QUANTITY.latitude, "Declination of the Sun"),
-});
+const sky = object(
+	{
+		axis_ra_deg: number(QUANTITY.angle, "Right ascension of the spin vector"),
+		axis_dec_deg: number(QUANTITY.latitude, "Declination of the spin vector"),
+		zero_deg: number(QUANTITY.angle, "Where ring angle 0 stands at t = 0"),
+		sun_ra_deg: number(QUANTITY.angle, "Right ascension of the Sun"),
+		sun_dec_deg: number(QUANTITY.latitude, "Declination of the Sun"),
+	},
+	"Attitude and Sun, ICRS",
+);
 
-const habitat = z.strictObject({
-	spin: spin.meta({ description: "Spin in the phase nominal" }),
-	phases: list(phase, "Other phases, at constant rates").exactOptional(),
-	air: air.meta({ description: "Air, turning with the ring" }),
-	sky: sky.meta({ description: "Attitude and Sun, ICRS" }),
-	decks: z.array(deck, { error: "a list" }).min(1, { error: "at least one deck" }).meta({ description: "Bays, each named by its floor" }),
-});
+const habitat = object(
+	{
+		spin,
+		phases: optional(list(phase, "Other phases, at constant rates")),
+		air,
+		sky,
+		decks: filled(deck, "at least one deck", "Bays, each named by its floor"),
+	},
+	"Spin, air, sky and bays",
+);
 
 export const crewMember = z.strictObject({
 	id: id("Name of the crew member"),
@@ -96,33 +110,39 @@ export const tailoring = z.strictObject({
 	reason: text("Why"),
 });
 
-const criteria = z.strictObject({
-	use: list(id("Name of a criteria set"), "Criteria sets assessed against"),
-	own: list(ownCriterion, "Criteria of the project's own").exactOptional(),
-	tailor: list(tailoring, "Limits used instead of the shipped ones").exactOptional(),
-});
+const criteria = object(
+	{
+		use: list(id("Name of a criteria set"), "Criteria sets assessed against"),
+		own: optional(list(ownCriterion, "Criteria of the project's own")),
+		tailor: optional(list(tailoring, "Limits used instead of the shipped ones")),
+	},
+	"What the results are held against",
+);
 
-export const assumptions = z.strictObject({
-	settle_threshold_degps: number(QUANTITY.threshold, "Illusion below which it counts as settled").exactOptional(),
-	canal_tau_s: number(QUANTITY.canalTau, "Long time constant of the canals").exactOptional(),
-	canal_tau_short_s: number(QUANTITY.canalTauShort, "Short time constant of the canals").exactOptional(),
-	adaptation_tau_s: number(QUANTITY.adaptationTau, "Adaptation time constant; absent: no adaptation").exactOptional(),
-	standoff_m: number(QUANTITY.standoff, "Mass centre to ladder, while climbing").exactOptional(),
-	mass_centre_fraction: number(QUANTITY.bodyFraction, "Height of the mass centre over stature").exactOptional(),
-	hand_fraction: number(QUANTITY.bodyFraction, "Height of the hands over stature, while climbing").exactOptional(),
-	leg_fraction: number(QUANTITY.bodyFraction, "Leg length over stature").exactOptional(),
-});
+export const assumptions = object(
+	{
+		settle_threshold_degps: optional(number(QUANTITY.threshold, "Illusion below which it counts as settled")),
+		canal_tau_s: optional(number(QUANTITY.canalTau, "Long time constant of the canals")),
+		canal_tau_short_s: optional(number(QUANTITY.canalTauShort, "Short time constant of the canals")),
+		adaptation_tau_s: optional(number(QUANTITY.adaptationTau, "Adaptation time constant; absent: no adaptation")),
+		standoff_m: optional(number(QUANTITY.standoff, "Mass centre to ladder, while climbing")),
+		mass_centre_fraction: optional(number(QUANTITY.bodyFraction, "Height of the mass centre over stature")),
+		hand_fraction: optional(number(QUANTITY.bodyFraction, "Height of the hands over stature, while climbing")),
+		leg_fraction: optional(number(QUANTITY.bodyFraction, "Leg length over stature")),
+	},
+	"Overrides of the assumptions",
+);
 
 export const layoutSchema = z.strictObject({
 	format: word([FORMAT], "What kind of file this is"),
-	version: z.literal(VERSION, { error: `${VERSION}` }).meta({ description: "Version of the format" }),
+	version: described("Version of the format", z.literal(VERSION, { error: `${VERSION}` })),
 	title: text("Title of the layout"),
-	habitat: habitat.meta({ description: "Spin, air, sky and bays" }),
-	elements: list(element, "Ladders, hatches, windows, workstations").exactOptional(),
-	crew: z.array(crewMember, { error: "a list" }).meta({ description: "Crew members" }),
-	activities: z.array(activity, { error: "a list" }).meta({ description: "What the crew does" }),
-	assumptions: assumptions.meta({ description: "Overrides of the assumptions" }).exactOptional(),
-	criteria: criteria.meta({ description: "What the results are held against" }),
+	habitat,
+	elements: optional(list(element, "Ladders, hatches, windows, workstations")),
+	crew: list(crewMember, "Crew members"),
+	activities: list(activity, "What the crew does"),
+	assumptions: optional(assumptions),
+	criteria,
 });
 
 export type LayoutFile = z.infer<typeof layoutSchema>;

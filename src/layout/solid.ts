@@ -144,7 +144,7 @@ export function workstationParts(habitat: Habitat, workstation: Workstation): Wo
 		post: {
 			kind: "capsule",
 			a: at(s, -w.seatBehind, postRadius, 0),
-			b: at(s, -w.seatBehind, w.seatHeight - postRadius, 0),
+			b: at(s, -w.seatBehind, w.seatHeight - seatThick, 0),
 			radius: postRadius,
 		},
 		base: box(s, [-w.seatBehind, baseThick / 2, 0], [0.3, baseThick, 0.3]),

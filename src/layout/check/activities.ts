@@ -1,21 +1,19 @@
-import { ASSUMPTIONS } from "../assumptions.ts";
-import type { LayoutParts, Part, Parts } from "../parts.ts";
-import { below, type Problem } from "../problem.ts";
+import { assumptionsOf } from "../assumptions.ts";
+import type { LayoutParts, Part } from "../parts.ts";
+import { below } from "../problem.ts";
 import { QUANTITY } from "../quantities.ts";
 import { type ActivityFile, type ActivityOf, type ElementFile, NOMINAL } from "../schema.ts";
-import { placeWithin, problem, told, within } from "./bounds.ts";
-import type { CheckedDecks } from "./habitat.ts";
-import { duplicates, each, refer } from "./references.ts";
+import { type Problems, placeWithin, problem, told, within } from "./bounds.ts";
+import type { SoundDecks } from "./habitat.ts";
+import { dangling, duplicates, each, type Known } from "./references.ts";
 
 interface Context {
 	readonly parts: LayoutParts;
-	readonly decks: CheckedDecks;
+	readonly decks: SoundDecks;
 	readonly phases: Known;
 	readonly ladders: Known;
 	readonly windows: Known;
 }
-
-type Known = Pick<Parts<unknown>, "present" | "known">;
 
 /** The ids that may be of elements of a kind: those of other kinds are out, those of entries that cannot be read are in. */
 function elementsOf({ elements }: LayoutParts, kind: ElementFile["kind"]): Known {
@@ -23,82 +21,78 @@ function elementsOf({ elements }: LayoutParts, kind: ElementFile["kind"]): Known
 	return { present: elements.present, known: new Set([...elements.known].filter((id) => !others.has(id))) };
 }
 
-interface DeckPlaceFile {
-	readonly deck: string;
-	readonly angle_deg: number;
-	readonly axial_m: number;
-	readonly height_m?: number;
-}
+const named = ({ parts }: Context, path: string, deck: string): Problems =>
+	dangling([{ path: below(path, "deck"), value: deck }], parts.decks, "deck");
 
 /** A place that names its deck; a height in it lies between floor and ceiling. */
-function placeProblems({ parts, decks }: Context, path: string, place: DeckPlaceFile): Problem[] {
-	const deck = decks.sound.get(place.deck);
-	const named = refer([{ path: below(path, "deck"), value: place.deck }], parts.decks, "deck");
-	if (!deck) return named;
+function* placeProblems(
+	context: Context,
+	path: string,
+	place: { deck: string; angle_deg: number; axial_m: number; height_m?: number },
+): Problems {
+	yield* named(context, path, place.deck);
+	const deck = context.decks.byId.get(place.deck);
+	if (!deck) return;
 	const height = place.height_m ?? 0;
-	const upright = within(below(path, "height_m"), height, { from: 0, to: deck.headroom }, "m", `below the ceiling of deck ${deck.id}`);
-	return [...named, ...upright, ...(upright.length > 0 ? [] : placeWithin(path, place, deck, height))];
+	const upright = [...within(below(path, "height_m"), height, { from: 0, to: deck.headroom }, "m", `below the ceiling of deck ${deck.id}`)];
+	yield* upright;
+	if (upright.length === 0) yield* placeWithin(path, place, deck, height);
 }
 
-function dropProblems(context: Context, path: string, a: ActivityOf<"drop">): Problem[] {
+function* dropProblems(context: Context, path: string, a: ActivityOf<"drop">): Problems {
 	const from = below(path, "from");
-	const problems = refer([{ path: below(from, "deck"), value: a.from.deck }], context.parts.decks, "deck");
-	const deck = context.decks.sound.get(a.from.deck);
-	if (!deck) return problems;
+	yield* named(context, from, a.from.deck);
+	const deck = context.decks.byId.get(a.from.deck);
+	if (!deck) return;
 	const half = a.object.diameter_m / 2;
+	const room = { from: half, to: deck.headroom - half };
 	const why = `half the diameter clear of floor and ceiling of deck ${deck.id}`;
-	const upright = within(below(from, "height_m"), a.from.height_m, { from: half, to: deck.headroom - half }, "m", why);
-	problems.push(...upright);
-	if (upright.length === 0) problems.push(...placeWithin(from, a.from, deck, a.from.height_m, half));
-	if (a.feet) problems.push(...placeWithin(below(path, "feet"), a.feet, deck));
-	return problems;
+	const upright = [...within(below(from, "height_m"), a.from.height_m, room, "m", why)];
+	yield* upright;
+	if (upright.length === 0) yield* placeWithin(from, a.from, deck, a.from.height_m, half);
+	if (a.feet) yield* placeWithin(below(path, "feet"), a.feet, deck);
 }
 
-function climbProblems(context: Context, path: string, a: ActivityOf<"climb">): Problem[] {
-	const problems = refer([{ path: below(path, "ladder"), value: a.ladder }], context.ladders, "ladder");
-	const element = context.parts.elements.byId.get(a.ladder);
-	if (element?.kind !== "ladder") return problems;
-	const length = element.foot_radius_m - element.head_radius_m;
+function* climbProblems({ parts, ladders }: Context, path: string, a: ActivityOf<"climb">): Problems {
+	yield* dangling([{ path: below(path, "ladder"), value: a.ladder }], ladders, "ladder");
+	const ladder = parts.elements.byId.get(a.ladder);
+	if (ladder?.kind !== "ladder") return;
+	const length = ladder.foot_radius_m - ladder.head_radius_m;
 	const most = QUANTITY.duration.max;
-	if (length / a.speed_mps <= most) return problems;
-	return [
-		...problems,
-		problem(below(path, "speed_mps"), a.speed_mps, `at least ${told(length / most)} m/s, to climb ${told(length)} m within ${most} s`),
-	];
+	if (length / a.speed_mps <= most) return;
+	yield problem(below(path, "speed_mps"), a.speed_mps, `at least ${told(length / most)} m/s, to climb ${told(length)} m within ${most} s`);
 }
 
-function sitStandProblems(context: Context, path: string, a: ActivityOf<"sit-stand">): Problem[] {
-	const problems = placeProblems(context, below(path, "at"), a.at);
-	const share = context.parts.assumptions?.mass_centre_fraction ?? ASSUMPTIONS.find((x) => x.key === "mass_centre_fraction")?.value;
-	if (context.parts.assumptions === null || typeof share !== "number") return problems;
+function* sitStandProblems(context: Context, path: string, a: ActivityOf<"sit-stand">): Problems {
+	yield* placeProblems(context, below(path, "at"), a.at);
+	const { assumptions, crew } = context.parts;
+	if (assumptions === null) return;
+	const share = assumptionsOf({ assumptions }).values.mass_centre_fraction;
 	for (const { value: who } of each("", a.crew)) {
-		const member = context.parts.crew.byId.get(who);
-		if (member && a.height_m >= share * member.stature_m) {
-			const expected = `less than ${told(share * member.stature_m)} m, where the mass centre of ${member.id} stands`;
-			problems.push(problem(below(path, "height_m"), a.height_m, expected));
-		}
+		const member = crew.byId.get(who);
+		if (!member || a.height_m < share * member.stature_m) continue;
+		const expected = `less than ${told(share * member.stature_m)} m, where the mass centre of ${member.id} stands`;
+		yield problem(below(path, "height_m"), a.height_m, expected);
 	}
-	return problems;
 }
 
-function windowViewProblems(context: Context, path: string, a: ActivityOf<"window-view">): Problem[] {
+function* windowViewProblems(context: Context, path: string, a: ActivityOf<"window-view">): Problems {
+	yield* dangling([{ path: below(path, "window"), value: a.window }], context.windows, "window");
 	const eye = below(path, "eye");
-	const named = refer([{ path: below(path, "window"), value: a.window }], context.windows, "window");
-	const problems = [...named, ...placeProblems(context, eye, a.eye)];
-	const deck = context.decks.sound.get(a.eye.deck);
+	yield* placeProblems(context, eye, a.eye);
+	const deck = context.decks.byId.get(a.eye.deck);
 	if (deck && a.eye.height_m === deck.headroom) {
-		problems.push(problem(below(eye, "height_m"), a.eye.height_m, `less than the headroom of deck ${deck.id}, ${deck.headroom} m`));
+		yield problem(below(eye, "height_m"), a.eye.height_m, `less than the headroom of deck ${deck.id}, ${deck.headroom} m`);
 	}
-	return problems;
 }
 
-function spinChangeProblems(context: Context, path: string, a: ActivityOf<"spin-change">): Problem[] {
-	const problems = placeProblems(context, below(path, "at"), a.at);
-	if (context.parts.spin?.value.profile === undefined) return problems;
-	return [...problems, problem(below(path, "kind"), a.kind, "another kind: habitat.spin.profile already says how the spin changes")];
+function* spinChangeProblems(context: Context, path: string, a: ActivityOf<"spin-change">): Problems {
+	yield* placeProblems(context, below(path, "at"), a.at);
+	if (context.parts.spin?.value.profile === undefined) return;
+	yield problem(below(path, "kind"), a.kind, "another kind: habitat.spin.profile already says how the spin changes");
 }
 
-function kindProblems(context: Context, path: string, a: ActivityFile): Problem[] {
+function kindProblems(context: Context, path: string, a: ActivityFile): Problems {
 	switch (a.kind) {
 		case "drop":
 			return dropProblems(context, path, a);
@@ -118,18 +112,16 @@ function kindProblems(context: Context, path: string, a: ActivityFile): Problem[
 	}
 }
 
-function caseProblems({ parts, phases: known }: Context, { path, value: a }: Part<ActivityFile>): Problem[] {
-	const crew = each(below(path, "crew"), a.crew);
-	const phases = each(below(path, "phase"), a.phase ?? []);
-	return [
-		...duplicates(crew, "a crew member"),
-		...refer(crew, parts.crew, "crew member"),
-		...duplicates(phases, "a phase"),
-		...refer(phases, known, "phase"),
-	];
+function* caseProblems({ parts, phases }: Context, { path, value: a }: Part<ActivityFile>): Problems {
+	const crew = below(path, "crew");
+	const phase = below(path, "phase");
+	yield* duplicates(each(crew, a.crew), "a crew member");
+	yield* dangling(each(crew, a.crew), parts.crew, "crew member");
+	yield* duplicates(each(phase, a.phase ?? []), "a phase");
+	yield* dangling(each(phase, a.phase ?? []), phases, "phase");
 }
 
-export function checkActivities(parts: LayoutParts, decks: CheckedDecks): Problem[] {
+export function* checkActivities(parts: LayoutParts, decks: SoundDecks): Problems {
 	const context: Context = {
 		parts,
 		decks,
@@ -137,8 +129,9 @@ export function checkActivities(parts: LayoutParts, decks: CheckedDecks): Proble
 		ladders: elementsOf(parts, "ladder"),
 		windows: elementsOf(parts, "window"),
 	};
-	return [
-		...duplicates(parts.activities.ids, "an activity id"),
-		...parts.activities.entries.flatMap((part) => [...caseProblems(context, part), ...kindProblems(context, part.path, part.value)]),
-	];
+	yield* duplicates(parts.activities.ids, "an activity id");
+	for (const part of parts.activities.entries) {
+		yield* caseProblems(context, part);
+		yield* kindProblems(context, part.path, part.value);
+	}
 }
