@@ -12,6 +12,8 @@ import type { Context } from "./context.ts";
 import type { CaseSummary, Derivation } from "./result.ts";
 import { derive, put, SummaryWriter } from "./summary.ts";
 
+export type { Path } from "../flight/path.ts";
+
 export type DropFile = ActivityOf<"drop">;
 
 /** A drop or toss as computed: what the summary, the series and the picture are drawn from. SI. */

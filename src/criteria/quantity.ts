@@ -24,6 +24,14 @@ export const DECK_QUANTITIES: Readonly<Record<string, { readonly unit: string; r
 export const DROP_QUANTITIES: Readonly<Record<string, { readonly unit: string; of(drop: Drop, decks: readonly Deck[]): Quantity }>> = {
 	/** From the struck sphere's rim to the nearest walkway's edge on the struck floor; negative inside. */
 	walkway_clearance_m: { unit: "m", of: walkwayClearance },
+	/** 1 where the sphere's rim comes down inside a walkway, else 0. */
+	walkway_landings: {
+		unit: "",
+		of: (drop, decks) => {
+			const clearance = walkwayClearance(drop, decks);
+			return clearance.value === null ? clearance : { value: clearance.value < 0 ? 1 : 0 };
+		},
+	},
 	hatches_passed: { unit: "", of: (drop) => ({ value: drop.flight.passed.length }) },
 	coamings_struck: { unit: "", of: (drop) => ({ value: drop.flight.struck.kind === "coaming" ? 1 : 0 }) },
 };

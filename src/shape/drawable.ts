@@ -24,6 +24,8 @@ export interface Triangles {
 	readonly opacity: number;
 	/** Painted on a surface: drawn over it at equal depth. */
 	readonly decal: boolean;
+	/** Drawn last, over everything, in list order with lines that are "over". */
+	readonly over?: boolean;
 }
 
 export interface WideLines {
@@ -35,7 +37,7 @@ export interface WideLines {
 	readonly colour: Uint8Array;
 	/** CSS px. */
 	readonly width: number;
-	/** Lengths in m of stroke and gap along each segment run; null is solid. */
+	/** Lengths of stroke and gap along each segment run, in the drawable's own coordinates before any part's matrix; null is solid. */
 	readonly dash: readonly [number, number] | null;
 	/** Hidden by what lies before it, or drawn over everything. */
 	readonly depth: "tested" | "over";
@@ -55,10 +57,15 @@ export interface Stars {
 
 export type Drawable = Triangles | WideLines | Stars;
 
-/** A drawable with a place of its own that changes with time: column-major 4 × 4, mutated in place. */
+/** A drawable with a place of its own that changes with time; what is not readonly is mutated in place, every frame. */
 export interface Part {
 	readonly drawable: Triangles | WideLines;
+	/** Column-major 4 × 4, drawable to stage. */
 	readonly matrix: Float32Array;
+	/** How many of its triangles or segments are drawn, from the first; absent is all. */
+	count?: number;
+	/** Absent is visible. */
+	visible?: boolean;
 }
 
 /** The palette entry a caller names, checked by the type. */

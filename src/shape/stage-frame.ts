@@ -21,7 +21,7 @@ export function stageFrame(deck: Deck, angle: number, axial: number): StageFrame
 }
 
 /** Writes the stage coordinates of a ring position into out[at…at+2]. */
-export function toStage(frame: StageFrame, p: RingVec, out: Float32Array | number[], at = 0): void {
+export function toStage(frame: StageFrame, p: RingVec, out: Float32Array | Float64Array | number[], at = 0): void {
 	const d = sub(p, frame.origin);
 	out[at] = dot(d, frame.triad.prograde);
 	out[at + 1] = dot(d, frame.triad.up);
@@ -29,7 +29,7 @@ export function toStage(frame: StageFrame, p: RingVec, out: Float32Array | numbe
 }
 
 /** Writes the stage components of a ring direction into out[at…at+2]. */
-export function directionToStage(frame: StageFrame, v: RingVec, out: Float32Array | number[], at = 0): void {
+export function directionToStage(frame: StageFrame, v: RingVec, out: Float32Array | Float64Array | number[], at = 0): void {
 	out[at] = dot(v, frame.triad.prograde);
 	out[at + 1] = dot(v, frame.triad.up);
 	out[at + 2] = v[2];

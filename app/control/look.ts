@@ -1,0 +1,98 @@
+import type { Look, View } from "../../src/shape/drop-picture.ts";
+
+const FOV_LEAST = (20 * Math.PI) / 180;
+const FOV_MOST = (110 * Math.PI) / 180;
+const STEEPEST = (85 * Math.PI) / 180;
+const NEAREST = 0.6;
+const FARTHEST = 60;
+
+/** The look in force: mutated here only, read by the conductor. Not in the history and not in the file. */
+let look: Look | null = null;
+let start: Look | null = null;
+let kept: string | null = null;
+const listeners = new Set<() => void>();
+
+/** Calls back on every change, until the returned function is called. */
+export function onLook(listener: () => void): () => void {
+	listeners.add(listener);
+	return () => {
+		listeners.delete(listener);
+	};
+}
+const tell = (): void => {
+	for (const listener of listeners) listener();
+};
+
+const copy = (from: Look): Look => ({ ...from, pan: new Float64Array(from.pan) });
+
+/** The look of a station; another station starts from its own, the same keeps what was turned. */
+export function lookFor(station: string, fresh: () => Look): Look {
+	if (look === null || kept !== station) {
+		start = fresh();
+		look = copy(start);
+		kept = station;
+	}
+	return look;
+}
+
+/** Back to the station's own look. */
+export function resetLook(view: View): void {
+	if (!look || !start) return;
+	if (view === "eyepoint") {
+		look.yaw = 0;
+		look.pitch = 0;
+		look.fovEye = start.fovEye;
+	} else {
+		const { yaw, pitch, fovEye } = look;
+		Object.assign(look, copy(start), { yaw, pitch, fovEye, pan: look.pan });
+		look.pan.set(start.pan);
+	}
+	tell();
+}
+
+const clamp = (value: number, low: number, high: number): number => Math.min(high, Math.max(low, value));
+
+/** Turns the view by angles, rad: the head in Eyepoint, the camera about the action in External. */
+export function turn(view: View, right: number, up: number): void {
+	if (!look) return;
+	if (view === "eyepoint") {
+		look.yaw += right;
+		look.pitch = clamp(look.pitch + up, -Math.PI, Math.PI);
+	} else {
+		look.azimuth -= right;
+		look.elevation = clamp(look.elevation - up, -STEEPEST, STEEPEST);
+	}
+	tell();
+}
+
+/** Nearer by a factor in External, narrower field in Eyepoint. */
+export function dolly(view: View, factor: number): void {
+	if (!look) return;
+	if (view === "eyepoint") look.fovEye = clamp(look.fovEye * factor, FOV_LEAST, FOV_MOST);
+	else look.distance = clamp(look.distance * factor, NEAREST, FARTHEST);
+	tell();
+}
+
+/** Moves the target across the picture, m. */
+export function pan(right: number, up: number): void {
+	if (!look) return;
+	const c = Math.cos(look.azimuth);
+	const s = Math.sin(look.azimuth);
+	look.pan[0] = (look.pan[0] as number) - right * c;
+	look.pan[2] = (look.pan[2] as number) + right * s;
+	look.pan[1] = (look.pan[1] as number) - up;
+	tell();
+}
+
+/** Vertical field of view of a view, degrees. */
+export const fieldOfView = (view: View): number => (look ? ((view === "eyepoint" ? look.fovEye : look.fovExternal) * 180) / Math.PI : 0);
+
+export function setFieldOfView(view: View, deg: number): void {
+	if (!look || !Number.isFinite(deg)) return;
+	const rad = clamp((deg * Math.PI) / 180, FOV_LEAST, FOV_MOST);
+	if (view === "eyepoint") look.fovEye = rad;
+	else look.fovExternal = rad;
+	tell();
+}
+
+export const currentLook = (): Look | null => look;

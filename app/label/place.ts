@@ -1,0 +1,113 @@
+import { project } from "../../src/shape/camera.ts";
+import type { AnchorName, DropPicture } from "../../src/shape/drop-picture.ts";
+
+/** A label over the picture: an element, where it hangs, and how far it may be pushed. */
+export interface Label {
+	readonly anchor: AnchorName;
+	readonly element: HTMLElement;
+	/** Placed first and kept clear of; smaller is sooner. */
+	readonly rank: number;
+	/** Middle of the element on its anchor, never moved. */
+	readonly centred: boolean;
+	/** Places tried, best first, as (x, y) in half sizes of the element with a margin. */
+	readonly tries: readonly (readonly [number, number])[];
+	width: number;
+	height: number;
+	/** The try that was taken last: kept while it still fits. */
+	taken: number;
+}
+
+interface Box {
+	x0: number;
+	y0: number;
+	x1: number;
+	y1: number;
+}
+
+const MARGIN = 12;
+const EDGE = 6;
+
+/** Puts every label beside its anchor so that none covers another, an instrument or the marks. Writes transforms only. */
+export class LabelPlacer {
+	private readonly pixel = new Float64Array(3);
+	private readonly boxes: Box[] = Array.from({ length: 40 }, () => ({ x0: 0, y0: 0, x1: 0, y1: 0 }));
+	private used = 0;
+
+	constructor(private readonly labels: readonly Label[]) {}
+
+	place(picture: DropPicture, width: number, height: number): void {
+		this.used = 0;
+		for (const rect of picture.instruments) this.take(rect[0] as number, rect[1] as number, rect[2] as number, rect[3] as number);
+		for (const name of ["landing", "ghost", "object"] as const) {
+			const anchor = picture.anchors[name];
+			if (anchor.visible && this.at(picture, anchor.point, width, height)) this.takeAround(this.pixel[0] as number, this.pixel[1] as number, 13);
+		}
+		for (const label of this.labels) this.put(label, picture, width, height);
+	}
+
+	private at(picture: DropPicture, p: Float64Array, width: number, height: number): boolean {
+		return project(picture.camera, width, height, p[0] as number, p[1] as number, p[2] as number, this.pixel);
+	}
+
+	private put(label: Label, picture: DropPicture, width: number, height: number): void {
+		const anchor = picture.anchors[label.anchor];
+		const { element } = label;
+		const before = anchor.visible && this.at(picture, anchor.point, width, height);
+		const x = this.pixel[0] as number;
+		const y = this.pixel[1] as number;
+		const inside = before && x > -40 && y > -40 && x < width + 40 && y < height + 40;
+		if (!inside) {
+			if (element.style.visibility !== "hidden") element.style.visibility = "hidden";
+			return;
+		}
+		let chosen = -1;
+		if (label.centred) chosen = 0;
+		else {
+			for (let k = -1; k < label.tries.length && chosen < 0; k++) {
+				const i = k < 0 ? label.taken : k;
+				if (i >= 0 && this.fits(label, i, x, y, width, height)) chosen = i;
+			}
+		}
+		if (chosen < 0) {
+			if (element.style.visibility !== "hidden") element.style.visibility = "hidden";
+			return;
+		}
+		label.taken = chosen;
+		const [tx, ty] = label.centred ? [0, 0] : (label.tries[chosen] as readonly [number, number]);
+		const cx = x + tx * (label.width / 2 + MARGIN);
+		const cy = y + ty * (label.height / 2 + MARGIN);
+		this.take(cx - label.width / 2, cy - label.height / 2, cx + label.width / 2, cy + label.height / 2);
+		element.style.transform = `translate(${Math.round(cx - label.width / 2)}px,${Math.round(cy - label.height / 2)}px)`;
+		if (element.style.visibility !== "visible") element.style.visibility = "visible";
+	}
+
+	private fits(label: Label, i: number, x: number, y: number, width: number, height: number): boolean {
+		const [tx, ty] = label.tries[i] as readonly [number, number];
+		const cx = x + tx * (label.width / 2 + MARGIN);
+		const cy = y + ty * (label.height / 2 + MARGIN);
+		const x0 = cx - label.width / 2 - 3;
+		const x1 = cx + label.width / 2 + 3;
+		const y0 = cy - label.height / 2 - 3;
+		const y1 = cy + label.height / 2 + 3;
+		if (x0 < EDGE || y0 < EDGE || x1 > width - EDGE || y1 > height - EDGE) return false;
+		for (let k = 0; k < this.used; k++) {
+			const b = this.boxes[k] as Box;
+			if (x0 < b.x1 && x1 > b.x0 && y0 < b.y1 && y1 > b.y0) return false;
+		}
+		return true;
+	}
+
+	private take(x0: number, y0: number, x1: number, y1: number): void {
+		const box = this.boxes[this.used];
+		if (!box) return;
+		this.used += 1;
+		box.x0 = x0;
+		box.y0 = y0;
+		box.x1 = x1;
+		box.y1 = y1;
+	}
+
+	private takeAround(x: number, y: number, r: number): void {
+		this.take(x - r, y - r, x + r, y + r);
+	}
+}

@@ -1,0 +1,97 @@
+import { useCallback, useEffect, useMemo, useRef, useState } from "react";
+import { DropFigure } from "../../src/shape/drop-figure.ts";
+import { DropPicture } from "../../src/shape/drop-picture.ts";
+import { DropStage, stanceOf } from "../../src/shape/drop-stage.ts";
+import type { Stars } from "../../src/shape/drawable.ts";
+import { listenKeys } from "../control/keys.ts";
+import { currentLook, lookFor, onLook } from "../control/look.ts";
+import { listenPointer } from "../control/pointer.ts";
+import { Labels } from "../label/Labels.tsx";
+import type { LabelPlacer } from "../label/place.ts";
+import type { AssessedCase } from "../store/core.ts";
+import { useSelectedCase } from "../store/navigate.ts";
+import { useSession } from "../store/session.ts";
+import { useStars } from "../store/stars.ts";
+import { advance, onTime, transient } from "../store/transient.ts";
+import { Conductor } from "./conductor.ts";
+import { usePainter } from "./usePainter.ts";
+
+/** The picture of a case; null where its kind is not built. */
+function pictureOf(c: AssessedCase, stars: Stars): DropPicture | null {
+	if (!c.motion || c.file.kind !== "drop") return null;
+	const { context, motion } = c;
+	const heading = c.file.release ? (c.file.release.heading_deg * Math.PI) / 180 : null;
+	const stance = stanceOf(motion, context.person.stature, heading);
+	return new DropPicture(
+		new DropStage(context.habitat, context.spin, motion, stance, stars),
+		new DropFigure(motion, stance, context.person.stature),
+	);
+}
+
+/** The stage: canvas, controls and labels of the selected case. */
+export function Stage() {
+	const shown = useSelectedCase();
+	const view = useSession((s) => s.view);
+	const stars = useStars((s) => s.stars);
+	const picture = useMemo(() => (shown ? pictureOf(shown, stars) : null), [shown, stars]);
+	const host = useRef<HTMLDivElement>(null);
+	const placer = useRef<LabelPlacer | null>(null);
+	const live = useRef(picture);
+	live.current = picture;
+	const [conductor] = useState(
+		() =>
+			new Conductor({
+				picture: () => live.current,
+				look: currentLook,
+				view: () => useSession.getState().view,
+				time: () => transient.time,
+				advance,
+				drawn: (p, width, height) => placer.current?.place(p, width, height),
+			}),
+	);
+	const station = shown ? `${shown.id} ${shown.crew} ${shown.phase}` : "";
+	if (picture) lookFor(station, () => picture.defaultLook());
+
+	useEffect(() => {
+		const element = host.current;
+		if (!element) return;
+		const current = () => useSession.getState().view;
+		const undo = [
+			listenPointer(element, current),
+			listenKeys(element, current),
+			onLook(conductor.wake),
+			onTime(conductor.wake),
+			useSession.subscribe(conductor.wake),
+		];
+		const sizes = new ResizeObserver(() => conductor.resize(element.clientWidth, element.clientHeight));
+		sizes.observe(element);
+		return () => {
+			sizes.disconnect();
+			for (const off of undo) off();
+			conductor.stop();
+		};
+	}, [conductor]);
+	// biome-ignore lint/correctness/useExhaustiveDependencies: another picture or view is what makes a frame due
+	useEffect(() => conductor.wake(), [conductor, picture, view]);
+
+	const canvas = usePainter(conductor);
+	const take = useCallback(
+		(next: LabelPlacer | null) => {
+			placer.current = next;
+			conductor.wake();
+		},
+		[conductor],
+	);
+	return (
+		// biome-ignore lint/a11y/noNoninteractiveTabindex: the stage is operated by keys of its own
+		<div ref={host} className="picture" role="application" tabIndex={0} aria-label={stageName(shown, view)} data-picture={canvas.kind}>
+			{canvas.element}
+			{shown && picture && <Labels shown={shown} picture={picture} onPlacer={take} />}
+			{canvas.lost && <p className="lost">The picture was lost by the graphics system. It comes back by itself.</p>}
+			{!picture && <p className="lost">Nothing to show: choose an activity that is built.</p>}
+		</div>
+	);
+}
+
+const stageName = (c: AssessedCase | null, view: string): string =>
+	c ? `${view === "eyepoint" ? "Eyepoint" : "External"} view of ${c.id}: arrow keys look, Home resets, Space plays` : "Stage, empty";

@@ -1,0 +1,66 @@
+import { createRoot, extend, type ReconcilerRoot, type RootState } from "@react-three/fiber";
+import { Group, PerspectiveCamera } from "three";
+import type { DropPicture } from "../../src/shape/drop-picture.ts";
+import { Lights } from "./Lights.tsx";
+import { Moving } from "./Moving.tsx";
+import type { Painter } from "./painter.ts";
+import { Sky } from "./Sky.tsx";
+import { Still } from "./Still.tsx";
+import { Viewpoint } from "./Viewpoint.tsx";
+
+extend({ Group });
+
+/** The picture by WebGL: an r3f root that draws only when the conductor says so. */
+export async function createGlPainter(canvas: HTMLCanvasElement): Promise<Painter> {
+	const camera = new PerspectiveCamera();
+	camera.matrixAutoUpdate = false;
+	const root: ReconcilerRoot<HTMLCanvasElement> = createRoot(canvas);
+	await root.configure({
+		frameloop: "never",
+		dpr: 1,
+		flat: true,
+		camera: camera as never,
+		gl: { canvas, antialias: false, alpha: false, stencil: false, powerPreference: "high-performance" },
+		size: { width: canvas.clientWidth || 1, height: canvas.clientHeight || 1, top: 0, left: 0 },
+	});
+	let store: { getState(): RootState } | null = null;
+	let ready = false;
+	let shown: DropPicture | null = null;
+	return {
+		kind: "webgl",
+		show(picture) {
+			if (picture === shown) return;
+			shown = picture;
+			ready = false;
+			store = root.render(
+				<>
+					<Lights />
+					<Viewpoint picture={picture} camera={camera} />
+					<Sky picture={picture} />
+					<Still key={`still ${keyOf(picture)}`} drawables={picture.stage.still} />
+					<Moving key={`moving ${keyOf(picture)}`} parts={picture.parts} onReady={() => (ready = true)} />
+				</>,
+			);
+		},
+		paint(width, height, scale) {
+			const state = store?.getState();
+			if (!state || !ready || width < 1 || height < 1 || state.gl.getContext().isContextLost()) return false;
+			if (state.size.width !== width || state.size.height !== height) state.setSize(width, height);
+			if (state.viewport.dpr !== scale) state.setDpr(scale);
+			state.advance(performance.now(), true);
+			return true;
+		},
+		dispose: () => root.unmount(),
+	};
+}
+
+const keys = new WeakMap<DropPicture, number>();
+let count = 0;
+/** Another picture is another tree: its objects are made anew and the old ones freed. */
+function keyOf(picture: DropPicture): number {
+	const known = keys.get(picture);
+	if (known !== undefined) return known;
+	count += 1;
+	keys.set(picture, count);
+	return count;
+}

@@ -1,0 +1,69 @@
+import { AdditiveBlending, BufferAttribute, BufferGeometry, Matrix3, Points, ShaderMaterial } from "three";
+import type { Stars } from "../../src/shape/drawable.ts";
+
+const VERTEX = /* glsl */ `
+attribute float diameter;
+attribute vec3 light;
+uniform mat3 sky;
+uniform float ratio;
+varying vec3 vLight;
+varying float vSize;
+void main() {
+	vec4 clip = projectionMatrix * vec4(mat3(viewMatrix) * (sky * position), 1.0);
+	gl_Position = clip.w > 0.0 ? vec4(clip.xy, 0.0, clip.w) : vec4(2.0, 2.0, 2.0, 1.0);
+	float wanted = diameter * ratio;
+	vSize = clamp(wanted, 1.0, 16.0);
+	gl_PointSize = vSize;
+	vLight = light * min(1.0, wanted * wanted);
+}`;
+
+const FRAGMENT = /* glsl */ `
+varying vec3 vLight;
+varying float vSize;
+void main() {
+	float r = length(gl_PointCoord - 0.5) * 2.0;
+	float disc = 1.0 - smoothstep(max(0.0, 1.0 - 3.0 / vSize), 1.0, r);
+	gl_FragColor = vec4(vLight * disc, 1.0);
+	#include <colorspace_fragment>
+}`;
+
+/** The stars as points at no distance, drawn before everything else. */
+export function wrapStars(stars: Stars): Points<BufferGeometry, ShaderMaterial> {
+	const geometry = new BufferGeometry();
+	geometry.setAttribute("position", new BufferAttribute(stars.direction, 3));
+	geometry.setAttribute("diameter", new BufferAttribute(stars.size, 1));
+	geometry.setAttribute("light", new BufferAttribute(stars.light, 3));
+	const material = new ShaderMaterial({
+		name: stars.name,
+		vertexShader: VERTEX,
+		fragmentShader: FRAGMENT,
+		uniforms: { sky: { value: new Matrix3() }, ratio: { value: 1 } },
+		depthTest: false,
+		depthWrite: false,
+		transparent: false,
+		blending: AdditiveBlending,
+	});
+	const points = new Points(geometry, material);
+	points.name = stars.name;
+	points.frustumCulled = false;
+	points.renderOrder = -1;
+	points.raycast = () => {};
+	return points;
+}
+
+/** Turns the sky: ICRS → stage, 9 numbers, row by row. */
+export function turnStars(points: Points<BufferGeometry, ShaderMaterial>, rotation: Float64Array, pixelRatio: number): void {
+	const r = rotation;
+	(points.material.uniforms.sky?.value as Matrix3).set(
+		r[0] as number,
+		r[1] as number,
+		r[2] as number,
+		r[3] as number,
+		r[4] as number,
+		r[5] as number,
+		r[6] as number,
+		r[7] as number,
+		r[8] as number,
+	);
+	(points.material.uniforms.ratio as { value: number }).value = pixelRatio;
+}

@@ -1,0 +1,81 @@
+import { createElement, type ReactElement, useEffect, useRef, useState } from "react";
+import type { Conductor } from "./conductor.ts";
+import type { Painter } from "./painter.ts";
+
+type Kind = "webgl" | "raster";
+
+/** `?picture=webgl` or `?picture=raster` in the address overrules the choice. */
+function asked(): Kind | null {
+	const value = new URLSearchParams(location.search).get("picture");
+	return value === "webgl" || value === "raster" ? value : null;
+}
+
+/**
+ * The canvas and who paints it: WebGL where a graphics processor draws it, the CPU raster where there is
+ * none or WebGL fails, since there the raster is the faster of the two. A canvas keeps its first kind of
+ * context, so another painter gets another canvas.
+ */
+export function usePainter(conductor: Conductor): { readonly element: ReactElement; readonly kind: Kind | "starting"; readonly lost: boolean } {
+	const canvas = useRef<HTMLCanvasElement>(null);
+	const [kind, setKind] = useState<Kind | "starting">("starting");
+	const [lost, setLost] = useState(false);
+
+	useEffect(() => {
+		if (kind !== "starting") return;
+		let live = true;
+		const wanted = asked();
+		if (wanted) setKind(wanted);
+		else
+			void import("./probe.ts").then(({ probeWebGl }) => {
+				if (live) setKind(probeWebGl() === "hardware" ? "webgl" : "raster");
+			});
+		return () => {
+			live = false;
+		};
+	}, [kind]);
+
+	useEffect(() => {
+		const element = canvas.current;
+		if (kind === "starting" || !element) return;
+		let painter: Painter | null = null;
+		let live = true;
+		const start = async (): Promise<void> => {
+			try {
+				const made =
+					kind === "webgl"
+						? await (await import("./gl-painter.tsx")).createGlPainter(element)
+						: (await import("./raster-painter.ts")).createRasterPainter(element);
+				if (!live) {
+					made.dispose();
+					return;
+				}
+				painter = made;
+				conductor.use(made);
+			} catch (error) {
+				if (kind === "raster") throw error;
+				if (live) setKind("raster");
+			}
+		};
+		void start();
+		const lose = (e: Event): void => {
+			e.preventDefault();
+			setLost(true);
+		};
+		const restore = (): void => {
+			setLost(false);
+			conductor.wake();
+		};
+		element.addEventListener("webglcontextlost", lose);
+		element.addEventListener("webglcontextrestored", restore);
+		return () => {
+			live = false;
+			element.removeEventListener("webglcontextlost", lose);
+			element.removeEventListener("webglcontextrestored", restore);
+			conductor.use(null);
+			painter?.dispose();
+		};
+	}, [kind, conductor]);
+
+	const element = createElement("canvas", { key: kind, ref: canvas, className: "canvas", "aria-hidden": true });
+	return { element, kind, lost };
+}

@@ -1,0 +1,9 @@
+import { writeLayout } from "../layout/canonical.ts";
+import { newLayout } from "../layout/new.ts";
+import { type Call, only } from "./call.ts";
+
+export async function newCommand(call: Call): Promise<number> {
+	only(call, "new", [], 1);
+	process.stdout.write(writeLayout(newLayout(call.positionals[0])));
+	return 0;
+}

@@ -1,0 +1,8 @@
+import { layoutJsonSchema } from "../layout/json-schema.ts";
+import { type Call, only } from "./call.ts";
+
+export async function schemaCommand(call: Call): Promise<number> {
+	only(call, "schema", [], 0);
+	process.stdout.write(`${JSON.stringify(layoutJsonSchema(), null, 2)}\n`);
+	return 0;
+}

@@ -1,0 +1,252 @@
+import { type Arrow, createArrow } from "./arrow.ts";
+import { aim, type Camera, createCamera, project } from "./camera.ts";
+import type { DropFigure } from "./drop-figure.ts";
+import type { DropStage } from "./drop-stage.ts";
+import type { Part } from "./drawable.ts";
+import { createAxisCue, createPanel, createPlumb, hudPoint, metresPerPixel } from "./hud.ts";
+
+export type View = "eyepoint" | "external";
+
+/** What the person at the screen has turned and moved; mutated by the controls. Angles in rad. */
+export interface Look {
+	/** Eyepoint: away from where the eyes look, + to the right and + up. */
+	yaw: number;
+	pitch: number;
+	fovEye: number;
+	/** External: about the action, from +axial towards prograde, and above the floor. */
+	azimuth: number;
+	elevation: number;
+	/** m */
+	distance: number;
+	/** Of the target, stage axes, m. */
+	readonly pan: Float64Array;
+	fovExternal: number;
+}
+
+/** A place that a label hangs at: a stage point, shown or not. */
+export interface Anchor {
+	readonly point: Float64Array;
+	visible: boolean;
+}
+
+export const ANCHORS = ["gap", "landing", "ghost", "object", "C", "K", "E", "prograde", "up", "axial", "rose", "rose-bar", "plumb"] as const;
+export type AnchorName = (typeof ANCHORS)[number];
+
+/** Of the instruments, CSS px. */
+const AXIS = { panel: 116, arm: 34, margin: 14 } as const;
+const ROSE = { width: 168, height: 178, arm: 74, margin: 14 } as const;
+const PLUMB = { width: 104, height: 178, long: 84 } as const;
+/** A picture narrower or lower than this has no room for rose and plumb. */
+const ROOM = { width: 560, height: 420 } as const;
+/** Length of the largest C in External, m. */
+const ARROW = 0.62;
+/** An arrow shorter than this (px) at its largest is drawn ten times as long, and says so. */
+const SHORTEST = 24;
+const LOWEST_LOOK = (86 * Math.PI) / 180;
+
+/** The whole picture of a drop: stage, person, arrows, instruments and cameras, for any renderer. */
+export class DropPicture {
+	readonly camera: Camera = createCamera(1.3);
+	readonly parts: readonly Part[];
+	readonly anchors: Readonly<Record<AnchorName, Anchor>> = Object.fromEntries(
+		ANCHORS.map((name) => [name, { point: new Float64Array(3), visible: false }]),
+	) as Record<AnchorName, Anchor>;
+	/** 1, or 10 where Coriolis and Euler are drawn ten times as long. */
+	minorFactor: 1 | 10 = 1;
+	/** Rectangles that the instruments take up, CSS px: left, top, right, bottom; empty ones are where none is. */
+	readonly instruments: readonly Float64Array[] = [new Float64Array(4), new Float64Array(4), new Float64Array(4)];
+	/** Drawn length of 1 m/s² of C on the rose, px. */
+	rosePixels = 0;
+	private readonly arrows = { C: createArrow("C"), K: createArrow("K"), E: createArrow("E") } as const;
+	private readonly axisPanel = createPanel(AXIS.panel, AXIS.panel);
+	private readonly axes = createAxisCue();
+	private readonly rosePanel = createPanel(ROSE.width, ROSE.height);
+	private readonly plumbPanel = createPanel(PLUMB.width, PLUMB.height);
+	private readonly plumb = createPlumb();
+	private readonly origin = new Float64Array(3);
+	private readonly pixel = new Float64Array(3);
+
+	constructor(
+		readonly stage: DropStage,
+		readonly figure: DropFigure,
+	) {
+		this.parts = [
+			...stage.parts,
+			...figure.parts,
+			...this.rosePanel.parts,
+			...this.plumbPanel.parts,
+			...this.axisPanel.parts,
+			...this.arrows.C.parts,
+			...this.arrows.E.parts,
+			...this.arrows.K.parts,
+			...this.plumb.parts,
+			...this.axes.parts,
+		];
+	}
+
+	/** The camera of External as first shown: beside the person, prograde to the right. */
+	defaultLook(): Look {
+		const { deck } = this.stage.drop;
+		const { stance } = this.stage;
+		const near = deck.axialTo - stance.axial >= 1.9 || deck.axialTo - stance.axial >= stance.axial - deck.axialFrom;
+		const towards = Math.cos(stance.facing) >= -0.2 ? 1 : -1;
+		const lean = ((near ? 1 : -1) * towards * 24 * Math.PI) / 180;
+		return {
+			yaw: 0,
+			pitch: 0,
+			fovEye: (75 * Math.PI) / 180,
+			azimuth: near ? lean : Math.PI + lean,
+			elevation: (11 * Math.PI) / 180,
+			distance: 3.05,
+			pan: new Float64Array(3),
+			fovExternal: (48 * Math.PI) / 180,
+		};
+	}
+
+	/** Moves everything to time t (s) as one view shows it in a picture of `width` × `height` CSS px. */
+	update(t: number, view: View, look: Look, width: number, height: number): void {
+		const { stage, figure } = this;
+		stage.update(t);
+		figure.update(t, view === "eyepoint");
+		if (view === "eyepoint") this.aimEye(look);
+		else this.aimExternal(look);
+		const room = width >= ROOM.width && height >= ROOM.height;
+		this.setForces(t, view, width, height, room);
+		this.setInstruments(view, width, height, room);
+		this.setMarks();
+	}
+
+	private aimEye(look: Look): void {
+		const { camera, figure } = this;
+		const eye = figure.eye;
+		for (let k = 0; k < 3; k++) camera.position[k] = eye.position[k] as number;
+		const [gx, gy, gz] = eye.gaze as unknown as [number, number, number];
+		const level = Math.hypot(gx, gz);
+		const heading = (level > 1e-6 ? Math.atan2(gz, gx) : this.stage.stance.facing) + look.yaw;
+		const elevation = Math.max(-LOWEST_LOOK, Math.min(LOWEST_LOOK, Math.atan2(gy, level) + look.pitch));
+		camera.fovY = look.fovEye;
+		aim(camera, Math.cos(elevation) * Math.cos(heading), Math.sin(elevation), Math.cos(elevation) * Math.sin(heading), 0, 1, 0);
+	}
+
+	private aimExternal(look: Look): void {
+		const { camera, stage } = this;
+		const [fx, , fz] = stage.facingDirection;
+		const reach = 0.22;
+		const tx = fx * reach + (look.pan[0] as number);
+		const ty = 0.9 + (look.pan[1] as number);
+		const tz = fz * reach + (look.pan[2] as number);
+		const c = Math.cos(look.elevation);
+		const dx = c * Math.sin(look.azimuth);
+		const dy = Math.sin(look.elevation);
+		const dz = c * Math.cos(look.azimuth);
+		camera.position[0] = tx + dx * look.distance;
+		camera.position[1] = ty + dy * look.distance;
+		camera.position[2] = tz + dz * look.distance;
+		camera.fovY = look.fovExternal;
+		aim(camera, -dx, -dy, -dz, 0, 1, 0);
+	}
+
+	/** The arrows: on the object in External, on the rose in Eyepoint. */
+	private setForces(t: number, view: View, width: number, height: number, room: boolean): void {
+		const { stage, camera, origin } = this;
+		const { greatest, object } = stage;
+		const flying = t > 0;
+		let scale: number;
+		let head: number;
+		let perMetre: number;
+		if (view === "eyepoint") {
+			hudPoint(camera, width, height, ROSE.margin + ROSE.width / 2, height - ROSE.margin - ROSE.height / 2 - 30, origin);
+			const s = metresPerPixel(camera, height);
+			scale = greatest.centrifugal > 0 ? (ROSE.arm * s) / greatest.centrifugal : 0;
+			head = 15 * s;
+			perMetre = 1 / s;
+		} else {
+			origin.set(object);
+			project(camera, width, height, object[0] as number, object[1] as number, object[2] as number, this.pixel);
+			perMetre = height / 2 / Math.tan(camera.fovY / 2) / Math.max(0.2, this.pixel[2] as number);
+			scale = greatest.centrifugal > 0 ? ARROW / greatest.centrifugal : 0;
+			head = 19 / perMetre;
+		}
+		this.rosePixels = scale * perMetre;
+		const minor = Math.max(greatest.coriolis, greatest.euler) * scale * perMetre;
+		this.minorFactor = minor > 0 && minor < SHORTEST ? 10 : 1;
+		const shown = flying && (view === "external" || room);
+		this.point("C", stage.forces.centrifugal, scale, head, shown);
+		this.point("K", stage.forces.coriolis, scale * this.minorFactor, head, shown);
+		this.point("E", stage.forces.euler, scale * this.minorFactor, head, shown && greatest.euler > 0);
+	}
+
+	private point(letter: "C" | "K" | "E", force: Float64Array, scale: number, head: number, shown: boolean): void {
+		const arrow: Arrow = this.arrows[letter];
+		const anchor = this.anchors[letter];
+		const size = Math.hypot(force[0] as number, force[1] as number, force[2] as number);
+		if (!shown || !(size > 0)) {
+			arrow.hide();
+			anchor.visible = false;
+			return;
+		}
+		const [x, y, z] = this.origin as unknown as [number, number, number];
+		arrow.set(x, y, z, (force[0] as number) / size, (force[1] as number) / size, (force[2] as number) / size, size * scale, head);
+		anchor.visible = arrow.visible;
+		anchor.point.set(arrow.tip);
+	}
+
+	private setInstruments(view: View, width: number, height: number, room: boolean): void {
+		const { camera, anchors, stage } = this;
+		const small = width < ROOM.width ? 0.72 : 1;
+		const middle = AXIS.margin + AXIS.panel / 2;
+		this.axisPanel.set(camera, width, height, width - middle, middle);
+		this.axes.set(camera, width, height, width - middle, middle + 6, AXIS.arm * small);
+		(["prograde", "up", "axial"] as const).forEach((name, i) => {
+			anchors[name].visible = true;
+			anchors[name].point.set(this.axes.tips[i] as Float64Array);
+		});
+		this.occupy(0, width - middle, middle, AXIS.panel, AXIS.panel, true);
+		const rose = room && view === "eyepoint";
+		for (const p of this.rosePanel.parts) p.visible = rose;
+		const roseX = ROSE.margin + ROSE.width / 2;
+		const roseY = height - ROSE.margin - ROSE.height / 2;
+		this.occupy(1, roseX, roseY, ROSE.width, ROSE.height, rose);
+		if (rose) this.rosePanel.set(camera, width, height, roseX, roseY);
+		anchors.rose.visible = rose;
+		hudPoint(camera, width, height, roseX, roseY - ROSE.height / 2 + 16, anchors.rose.point);
+		anchors["rose-bar"].visible = rose;
+		hudPoint(camera, width, height, roseX, roseY + ROSE.height / 2 - 16, anchors["rose-bar"].point);
+		const weight = Math.hypot(stage.plumb[0] as number, stage.plumb[1] as number, stage.plumb[2] as number) > 0;
+		for (const p of this.plumbPanel.parts) p.visible = room;
+		this.plumb.setVisible(room && weight);
+		const plumbX = rose ? ROSE.margin + ROSE.width + 10 + PLUMB.width / 2 : ROSE.margin + PLUMB.width / 2;
+		const plumbY = height - ROSE.margin - PLUMB.height / 2;
+		this.occupy(2, plumbX, plumbY, PLUMB.width, PLUMB.height, room);
+		if (room) this.plumbPanel.set(camera, width, height, plumbX, plumbY);
+		if (room && weight) {
+			const [gx, gy, gz] = stage.plumb as unknown as [number, number, number];
+			this.plumb.set(camera, width, height, plumbX, plumbY - PLUMB.height / 2 + 26, PLUMB.long, gx, gy, gz);
+		}
+		anchors.plumb.visible = room;
+		hudPoint(camera, width, height, plumbX, plumbY + PLUMB.height / 2 - 26, anchors.plumb.point);
+	}
+
+	private occupy(i: number, x: number, y: number, w: number, h: number, there: boolean): void {
+		const box = this.instruments[i] as Float64Array;
+		box[0] = there ? x - w / 2 : 0;
+		box[1] = there ? y - h / 2 : 0;
+		box[2] = there ? x + w / 2 : 0;
+		box[3] = there ? y + h / 2 : 0;
+	}
+
+	private setMarks(): void {
+		const { anchors, stage } = this;
+		const landed = stage.parts.some((p) => p.drawable.name === "landing" && p.visible);
+		const ghost = stage.parts.some((p) => p.drawable.name === "ghost landing" && p.visible);
+		anchors.object.visible = true;
+		anchors.object.point.set(stage.object);
+		anchors.landing.visible = landed && stage.landing !== null;
+		if (stage.landing) anchors.landing.point.set(stage.landing);
+		anchors.ghost.visible = ghost && stage.ghostLanding !== null;
+		if (stage.ghostLanding) anchors.ghost.point.set(stage.ghostLanding);
+		anchors.gap.visible = anchors.landing.visible && anchors.ghost.visible && stage.gap !== null;
+		if (stage.landing && stage.ghostLanding)
+			for (let k = 0; k < 3; k++) anchors.gap.point[k] = ((stage.landing[k] as number) + (stage.ghostLanding[k] as number)) / 2;
+	}
+}

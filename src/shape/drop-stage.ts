@@ -1,0 +1,194 @@
+import { defaultFeet } from "../body/reach.ts";
+import type { Drop } from "../activity/drop.ts";
+import { apparentParts } from "../frame/apparent.ts";
+import type { Spin } from "../frame/spin.ts";
+import { angleNear, type Deck, floorAlong, floorAngle, type Habitat, heightAbove } from "../layout/habitat.ts";
+import { writeRingFromIcrs } from "../sky/attitude.ts";
+import { type RingVec, ring } from "../vector/vec3.ts";
+import { bayShape } from "./bay.ts";
+import type { Drawable, Part, Stars } from "./drawable.ts";
+import { elementShapes } from "./elements.ts";
+import { objectShape } from "./elements-object.ts";
+import { contactShadow } from "./elements-shadow.ts";
+import { floorPoint, gapLine, ghostMark, landingMark } from "./landing-mark.ts";
+import { part, placeAt } from "./part.ts";
+import { directionToStage, type StageFrame, stageFrame, toStage } from "./stage-frame.ts";
+import { GHOST_TRAIL, OBJECT_TRAIL, trailOf } from "./trail.ts";
+
+/** Where and how the person stands: feet at a floor place, facing a heading (rad). */
+export interface Stance {
+	readonly angle: number;
+	readonly axial: number;
+	readonly facing: number;
+	/** Whether the layout says so; otherwise the hand decides. */
+	readonly given: boolean;
+}
+
+/** Nearer than this to a bulkhead nobody stands, m. */
+const CLEAR = 0.3;
+
+/** The stance of a drop: as the layout says, else so that the hand is at the release, facing the way it goes. */
+export function stanceOf(drop: Drop, stature: number, releaseHeading: number | null): Stance {
+	if (drop.feet) return { angle: drop.feet.angle, axial: drop.feet.axial, facing: drop.feet.facing, given: true };
+	const { deck, position } = drop;
+	const facing = releaseHeading ?? 0;
+	const offset = defaultFeet(heightAbove(deck, position), stature, facing);
+	const angle = angleNear(Math.atan2(position[1], position[0]), deck.middle);
+	const within = (value: number, from: number, to: number): number => Math.min(Math.max(value, from + CLEAR), to - CLEAR);
+	let along = floorAlong(deck, angle) + offset.prograde;
+	if (!deck.closed) along = within(along, floorAlong(deck, deck.from), floorAlong(deck, deck.to));
+	return { angle: floorAngle(deck, along), axial: within(position[2] + offset.axial, deck.axialFrom, deck.axialTo), facing, given: false };
+}
+
+/** The object's apparent-gravity parts at an instant, stage components, m/s². */
+export interface ObjectForces {
+	readonly centrifugal: Float64Array;
+	readonly coriolis: Float64Array;
+	readonly euler: Float64Array;
+}
+
+/**
+ * The drop as drawn, in stage coordinates about the person's feet: the bay, the flight with its trail
+ * and marks, and what the forces are. The person is drawn by the figure; cameras and instruments look on.
+ */
+export class DropStage {
+	readonly frame: StageFrame;
+	readonly still: readonly Drawable[];
+	readonly parts: readonly Part[];
+	readonly skyRotation = new Float64Array(9);
+	/** Of the flying sphere's centre, m. */
+	readonly object = new Float64Array(3);
+	readonly forces: ObjectForces = { centrifugal: new Float64Array(3), coriolis: new Float64Array(3), euler: new Float64Array(3) };
+	/** Largest size of each over the flight, m/s². */
+	readonly greatest = { centrifugal: 0, coriolis: 0, euler: 0 };
+	/** Where it lands and where it would have without turning, stage, m; null where it does not. */
+	readonly landing: Float64Array | null;
+	readonly ghostLanding: Float64Array | null;
+	/** From where it would have landed to where it lands, along the floor, m, + prograde and + axial; null where one is missing or lies on another deck. */
+	readonly gap: { readonly prograde: number; readonly axial: number; readonly length: number } | null;
+	/** Unit direction of apparent gravity on the standing person; none at no weight. */
+	readonly plumb = new Float64Array(3);
+	private readonly state = new Float64Array(6);
+	private readonly objectParts: readonly Part[];
+	private readonly showTrail: (t: number) => void;
+	private readonly showGhost: (t: number) => void;
+	private readonly landed: readonly Part[];
+	private readonly ghostLanded: readonly Part[];
+	private readonly gapParts: readonly Part[];
+	private readonly ringRotation = new Float64Array(9);
+
+	constructor(
+		private readonly habitat: Habitat,
+		private readonly spin: Spin,
+		readonly drop: Drop,
+		readonly stance: Stance,
+		readonly stars: Stars,
+	) {
+		const { deck } = drop;
+		this.frame = stageFrame(deck, stance.angle, stance.axial);
+		const { frame } = this;
+		this.still = [
+			...bayShape(habitat, deck.index, frame),
+			...elementShapes(habitat, frame),
+			contactShadow(frame, deck, stance.angle, stance.axial, 0.26, 0.3),
+		];
+		const trail = trailOf(frame, drop.flight.path, drop.flight.end, OBJECT_TRAIL);
+		const ghost = drop.ghost.end === null ? null : trailOf(frame, drop.ghost.path, drop.ghost.end, GHOST_TRAIL);
+		this.showTrail = trail.show;
+		this.showGhost = ghost ? ghost.show : () => {};
+		this.objectParts = objectShape(drop.object.diameter > 0 ? drop.object.diameter : 0.02).map(part);
+		const marks = this.marks();
+		this.landed = marks.landed;
+		this.ghostLanded = marks.ghostLanded;
+		this.gapParts = marks.gap;
+		this.gap = marks.between;
+		this.landing = drop.landing ? this.stagePoint(drop.landing.point) : null;
+		this.ghostLanding = drop.ghost.point ? this.stagePoint(drop.ghost.point) : null;
+		this.parts = [...this.ghostLanded, ...this.gapParts, ...this.landed, ...(ghost ? ghost.parts : []), ...trail.parts, ...this.objectParts];
+		this.measure();
+	}
+
+	private stagePoint(p: RingVec): Float64Array {
+		const out = new Float64Array(3);
+		toStage(this.frame, p, out);
+		return out;
+	}
+
+	private marks(): { landed: readonly Part[]; ghostLanded: readonly Part[]; gap: readonly Part[]; between: DropStage["gap"] } {
+		const { drop, frame, habitat } = this;
+		const { struck } = drop.flight;
+		const radius = Math.min(0.09, Math.max(0.03, drop.object.diameter / 2));
+		const floor: Deck | null = struck.kind === "deck" ? (habitat.decks[struck.deck] as Deck) : null;
+		const landing = floor && drop.landing ? floorPoint(floor, drop.landing.point) : null;
+		const ghost = drop.ghost.point ? floorPoint(drop.deck, drop.ghost.point) : null;
+		const same = floor === drop.deck;
+		return {
+			landed: floor && landing ? landingMark(frame, floor, landing, radius) : [],
+			ghostLanded: ghost ? ghostMark(frame, drop.deck, ghost, radius) : [],
+			gap: same && floor && landing && ghost ? gapLine(frame, floor, ghost, landing, radius) : [],
+			between: same && landing && ghost ? gapBetween(landing.along - ghost.along, landing.axial - ghost.axial) : null,
+		};
+	}
+
+	/** Finds the largest forces, so that arrow scales stand still. */
+	private measure(): void {
+		const n = 200;
+		const size = (v: Float64Array): number => Math.hypot(v[0] as number, v[1] as number, v[2] as number);
+		for (let i = 0; i <= n; i++) {
+			this.update((this.drop.flight.end * i) / n);
+			this.greatest.centrifugal = Math.max(this.greatest.centrifugal, size(this.forces.centrifugal));
+			this.greatest.coriolis = Math.max(this.greatest.coriolis, size(this.forces.coriolis));
+			this.greatest.euler = Math.max(this.greatest.euler, size(this.forces.euler));
+		}
+	}
+
+	/** Moves everything to time t, s. */
+	update(t: number): void {
+		const { drop, spin, frame, state } = this;
+		const shown = Math.min(Math.max(t, 0), drop.flight.end);
+		drop.flight.path.stateAt(shown, state);
+		const position = ring(state[0] as number, state[1] as number, state[2] as number);
+		const velocity = ring(state[3] as number, state[4] as number, state[5] as number);
+		toStage(frame, position, this.object);
+		for (const p of this.objectParts) placeAt(p.matrix, this.object[0] as number, this.object[1] as number, this.object[2] as number, 1);
+		const parts = apparentParts(spin, shown, position, velocity, ring(0, 0, 0));
+		directionToStage(frame, parts.centrifugal, this.forces.centrifugal);
+		directionToStage(frame, parts.coriolis, this.forces.coriolis);
+		directionToStage(frame, parts.euler, this.forces.euler);
+		this.showTrail(shown);
+		this.showGhost(shown);
+		const landed = shown >= drop.flight.end - 1e-9;
+		const ghostLanded = drop.ghost.end !== null && (shown >= drop.ghost.end || landed);
+		setVisible(this.landed, landed);
+		setVisible(this.ghostLanded, ghostLanded);
+		setVisible(this.gapParts, landed);
+		const stand = apparentParts(spin, shown, frame.origin, ring(0, 0, 0), ring(0, 0, 0)).sum;
+		const weight = Math.hypot(stand[0], stand[1], stand[2]);
+		directionToStage(frame, stand, this.plumb);
+		for (let k = 0; k < 3; k++) this.plumb[k] = weight > 0 ? (this.plumb[k] as number) / weight : 0;
+		this.turnSky(shown);
+	}
+
+	/** ICRS → stage at time t. */
+	private turnSky(t: number): void {
+		const { ringRotation: r, skyRotation: out } = this;
+		writeRingFromIcrs(this.habitat.sky, this.spin.angle(t), r);
+		const { prograde, up } = this.frame.triad;
+		for (let k = 0; k < 3; k++) {
+			out[k] = prograde[0] * (r[k] as number) + prograde[1] * (r[3 + k] as number);
+			out[3 + k] = up[0] * (r[k] as number) + up[1] * (r[3 + k] as number);
+			out[6 + k] = r[6 + k] as number;
+		}
+	}
+
+	/** The stage triad of a heading at the stance: what "in front of you" means. */
+	get facingDirection(): readonly [number, number, number] {
+		return [Math.cos(this.stance.facing), 0, Math.sin(this.stance.facing)];
+	}
+}
+
+const gapBetween = (prograde: number, axial: number) => ({ prograde, axial, length: Math.hypot(prograde, axial) });
+
+function setVisible(parts: readonly Part[], visible: boolean): void {
+	for (const p of parts) p.visible = visible;
+}
