@@ -1,0 +1,85 @@
+import { useId } from "react";
+import { SUMMARY_KEYS } from "../../src/activity/keys.ts";
+import type { AssessedCase } from "../store/core.ts";
+import { useSession } from "../store/session.ts";
+import { DerivationPanel } from "./DerivationPanel.tsx";
+import type { Printer } from "./print.ts";
+import { nameOf, struckWords } from "./words.ts";
+
+/** What each summary key is called on screen, in the order shown. */
+const NAMES: Readonly<Record<string, string>> = {
+	struck: "Strikes",
+	flight_time_s: "Time to the impact",
+	landing_speed_mps: "Speed at the impact",
+	landing_angle_deg: "Arrives off vertical",
+	equal_earth_drop_m: "Equal drop on Earth",
+	impact_energy_J: "Energy at the impact",
+	landing_prograde_m: "With spin (−: against)",
+	landing_axial_m: "Along the axis",
+	landing_radius_m: "Radius of the landing",
+	landing_from_feet_prograde_m: "From the feet, with spin",
+	landing_from_feet_axial_m: "From the feet, axial",
+	passed: "Hatches passed",
+};
+
+/** The numbers of the case but the headline's, each opening to its derivation. */
+export function Numbers({ c, headline, print }: { readonly c: AssessedCase; readonly headline: string | null; readonly print: Printer }) {
+	const open = useSession((s) => s.derivation);
+	const units = SUMMARY_KEYS[c.kind];
+	const keys = Object.keys(units).filter((key) => key !== headline);
+	const named = Object.keys(NAMES).filter((key) => keys.includes(key));
+	return (
+		<ul className="numbers" aria-label="Numbers of this case">
+			{[...named, ...keys.filter((key) => !(key in NAMES))].map((key) => (
+				<Row key={key} name={NAMES[key] ?? nameOf(key)} summaryKey={key} c={c} unit={units[key] ?? ""} open={open === key} print={print} />
+			))}
+		</ul>
+	);
+}
+
+interface RowProps {
+	readonly name: string;
+	readonly summaryKey: string;
+	readonly c: AssessedCase;
+	readonly unit: string;
+	readonly open: boolean;
+	readonly print: Printer;
+}
+
+function Row({ name, summaryKey, c, unit, open, print }: RowProps) {
+	const id = useId();
+	const derivation = c.derivations[summaryKey];
+	const reason = c.reasons[summaryKey];
+	const value = valueWords(c, summaryKey, unit, print);
+	if (!derivation)
+		return (
+			<li className="row">
+				<span>{name}</span>
+				<span className="value">{value}</span>
+				{reason && <p className="muted">{reason}</p>}
+			</li>
+		);
+	return (
+		<li>
+			<button
+				type="button"
+				className="row"
+				aria-expanded={open}
+				aria-controls={open ? id : undefined}
+				onClick={() => useSession.setState({ derivation: open ? null : summaryKey })}
+			>
+				<span>{name}</span>
+				<span className="value">{value}</span>
+			</button>
+			{open && <DerivationPanel id={id} derivation={derivation} />}
+		</li>
+	);
+}
+
+function valueWords(c: AssessedCase, key: string, unit: string, print: Printer): string {
+	const value = c.summary[key];
+	if (value === null || value === undefined) return "none";
+	if (typeof value === "number") return print(value, unit);
+	if (typeof value === "string") return key === "struck" ? struckWords(c) : value;
+	return value.length === 0 ? "none" : value.map((v) => (typeof v === "number" ? print(v, unit) : v)).join(", ");
+}

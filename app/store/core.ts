@@ -1,0 +1,25 @@
+import demo from "../../assets/layout/larkspur.layout.json?raw";
+import { type Assessed, type AssessedCase, assess } from "../../src/assess.ts";
+import type { CriterionRow } from "../../src/criteria/row.ts";
+import type { LayoutFile } from "../../src/layout/schema.ts";
+
+export { FORMULAS, type Formula } from "../../src/activity/formula.ts";
+export type { Derivation, SummaryValue } from "../../src/activity/result.ts";
+export type { Finding } from "../../src/criteria/row.ts";
+export { writeLayout } from "../../src/layout/canonical.ts";
+export { newLayout } from "../../src/layout/new.ts";
+export { parseLayout } from "../../src/layout/parse.ts";
+export type { Problem } from "../../src/layout/problem.ts";
+export type { ActivityFile, ActivityOf, LayoutFile } from "../../src/layout/schema.ts";
+export type { Assessed, AssessedCase };
+
+/** The shipped criteria, all files of the folder. */
+const SHIPPED = Object.values(
+	import.meta.glob<readonly CriterionRow[]>("../../assets/criteria/*.json", { eager: true, import: "default" }),
+).flat();
+
+export const assessLayout = (layout: LayoutFile): Assessed => assess(layout, SHIPPED);
+
+/** The layout that is open when none was asked for. */
+export const DEMO: string = demo;
+export { type Change, edit, type History, redo, startHistory, undo } from "./history-interim.ts";

@@ -1,0 +1,73 @@
+import { type Deck, deckTriad, heightAbove } from "../../src/layout/habitat.ts";
+import { degFromRad } from "../../src/quantity/convert.ts";
+import { dot, type RingVec, ring, sub } from "../../src/vector/vec3.ts";
+import type { AssessedCase } from "./core.ts";
+
+/** What happens at an instant, on the case's clock. */
+export interface MotionEvent {
+	readonly t: number;
+	readonly name: string;
+}
+
+const STRIKES: Readonly<Record<string, string>> = {
+	deck: "lands",
+	ceiling: "strikes the ceiling",
+	coaming: "strikes the coaming",
+	element: "is struck",
+	outside: "leaves the bay",
+	none: "is no longer followed",
+};
+
+/** Events of a motion in order, the release first; empty where the kind is not built. */
+export function eventsOf(c: AssessedCase): readonly MotionEvent[] {
+	if (!c.motion) return [];
+	const { struck, end } = c.motion.flight;
+	return [
+		{ t: 0, name: "release" },
+		{ t: end, name: STRIKES[struck.kind] ?? "strikes a bulkhead" },
+	];
+}
+
+/** Length of the case's clock, s; 0 where the kind is not built. */
+export const durationOf = (c: AssessedCase): number => c.motion?.flight.end ?? 0;
+
+/** The object's centre against time, from the release: above the floor, and along it from below the release. */
+export interface DropTrace {
+	/** s */
+	readonly t: readonly number[];
+	/** Height above the floor of the deck it was released on, m. */
+	readonly height: readonly number[];
+	/** Along that floor, + with spin, m. */
+	readonly along: readonly number[];
+}
+
+const SAMPLES = 120;
+const traces = new WeakMap<AssessedCase, DropTrace>();
+
+/** Computed once for each case. Null where the kind is not built, or nothing moves. */
+export function dropTrace(c: AssessedCase): DropTrace | null {
+	if (!c.motion || !(durationOf(c) > 0)) return null;
+	const found = traces.get(c);
+	if (found) return found;
+	const { flight, deck, position } = c.motion;
+	const state = new Float64Array(6);
+	const t: number[] = [];
+	const height: number[] = [];
+	const along: number[] = [];
+	for (let i = 0; i <= SAMPLES; i++) {
+		const at = (flight.end * i) / SAMPLES;
+		flight.path.stateAt(at, state);
+		const p = ring(state[0] as number, state[1] as number, state[2] as number);
+		t.push(at);
+		height.push(heightAbove(deck, p));
+		along.push(deck.floor === "curved" ? deck.radius * flight.path.sweptAt(at) : alongFlat(deck, position, p));
+	}
+	const trace = { t, height, along };
+	traces.set(c, trace);
+	return trace;
+}
+
+const alongFlat = (deck: Deck, from: RingVec, p: RingVec): number => dot(sub(p, from), deckTriad(deck, deck.middle).prograde);
+
+/** Heading the person faces in a case, degrees, or null where the layout does not say. */
+export const facingDeg = (c: AssessedCase): number | null => (c.motion?.feet ? degFromRad(c.motion.feet.facing) : null);
