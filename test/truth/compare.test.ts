@@ -35,9 +35,13 @@ describe("meter", () => {
 	it("gives n, mean and nearest-rank percentiles of each group", () => {
 		const ten = Array.from({ length: 10 }, (_, i) => row({ check: `${i}`, ours: 1 + (10 - i), tolerance: 20 }));
 		expect(meter([...ten, row({ group: "h", ours: 3, reference: 2, kind: "relative", tolerance: 1 })])).toEqual([
-			{ group: "g", unit: "m", n: 10, mean: 5.5, p50: 5, p90: 9, max: 10, tolerance: 20, sources: ["s"] },
-			{ group: "h", unit: "relative", n: 1, mean: 0.5, p50: 0.5, p90: 0.5, max: 0.5, tolerance: 1, sources: ["s"] },
+			{ group: "g", unit: "m", n: 10, mean: 5.5, p50: 5, p90: 9, max: 10, allowed: [20, 20], sources: ["s"] },
+			{ group: "h", unit: "relative", n: 1, mean: 0.5, p50: 0.5, p90: 0.5, max: 0.5, allowed: [1, 1], sources: ["s"] },
 		]);
+	});
+
+	it("gives the range of tolerances of a group", () => {
+		expect(meter([row({ tolerance: 0.3 }), row({ tolerance: 0.1 })]).map((l) => l.allowed)).toEqual([[0.1, 0.3]]);
 	});
 
 	it("keeps kinds and units apart and throws on a number that is not finite", () => {

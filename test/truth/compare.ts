@@ -33,7 +33,7 @@ export function compare(row: TruthRow): Comparison {
 	return { error, within: error <= row.tolerance };
 }
 
-/** Errors of one group, of one kind, unit and tolerance. */
+/** Errors of one group, of one kind and unit. */
 export interface MeterLine {
 	readonly group: string;
 	/** "relative", or the unit of an absolute error. */
@@ -43,7 +43,8 @@ export interface MeterLine {
 	readonly p50: number;
 	readonly p90: number;
 	readonly max: number;
-	readonly tolerance: number;
+	/** Least and greatest error allowed in it. */
+	readonly allowed: readonly [number, number];
 	readonly sources: readonly string[];
 }
 
@@ -55,13 +56,14 @@ const percentile = (sorted: readonly number[], share: number): number =>
 export function meter(rows: readonly TruthRow[]): MeterLine[] {
 	const gathered = new Map<string, TruthRow[]>();
 	for (const row of rows) {
-		const key = JSON.stringify([row.group, row.kind, row.kind === "relative" ? "" : row.unit, row.tolerance]);
+		const key = JSON.stringify([row.group, row.kind, row.kind === "relative" ? "" : row.unit]);
 		const list = gathered.get(key);
 		if (list) list.push(row);
 		else gathered.set(key, [row]);
 	}
 	return [...gathered.values()].map((list) => {
-		const { group, kind, unit, tolerance } = list[0] as TruthRow;
+		const { group, kind, unit } = list[0] as TruthRow;
+		const tolerances = list.map((row) => row.tolerance);
 		const errors = list.map((row) => compare(row).error).sort((a, b) => a - b);
 		return {
 			group,
@@ -71,7 +73,7 @@ export function meter(rows: readonly TruthRow[]): MeterLine[] {
 			p50: percentile(errors, 0.5),
 			p90: percentile(errors, 0.9),
 			max: percentile(errors, 1),
-			tolerance,
+			allowed: [Math.min(...tolerances), Math.max(...tolerances)] as const,
 			sources: [...new Set(list.map((row) => row.source))],
 		};
 	});

@@ -3,7 +3,7 @@ import { meter, type TruthRow } from "./compare.ts";
 
 const short = (value: number): string => (value === 0 ? "0" : Number(value.toPrecision(2)).toString());
 
-/** The accuracy table, Markdown: one line a group, tolerance and unit. */
+/** The accuracy table, Markdown: one line a group and unit. */
 export function meterTable(rows: readonly TruthRow[]): string {
 	const head = ["group", "error in", "n", "mean", "p50", "p90", "max", "allowed", "source"];
 	const body = meter(rows).map((l) => [
@@ -14,7 +14,7 @@ export function meterTable(rows: readonly TruthRow[]): string {
 		short(l.p50),
 		short(l.p90),
 		short(l.max),
-		short(l.tolerance),
+		[...new Set(l.allowed)].map(short).join(" to "),
 		l.sources.join("; "),
 	]);
 	return [head, head.map(() => "---"), ...body].map((cells) => `| ${cells.join(" | ")} |`).join("\n");
