@@ -3,7 +3,7 @@ import { aim, type Camera, createCamera, project } from "./camera.ts";
 import type { DropFigure } from "./drop-figure.ts";
 import type { DropStage } from "./drop-stage.ts";
 import type { Part } from "./drawable.ts";
-import { createAxisCue, createPanel, createPlumb, hudPoint, metresPerPixel } from "./hud.ts";
+import { createAxisCue, createPanel, createPlumb, hudDirection, hudPoint, metresPerPixel } from "./hud.ts";
 
 export type View = "eyepoint" | "external";
 
@@ -33,16 +33,15 @@ export const ANCHORS = ["gap", "landing", "ghost", "object", "C", "K", "E", "pro
 export type AnchorName = (typeof ANCHORS)[number];
 
 /** Of the instruments, CSS px. */
-const AXIS = { panel: 116, arm: 34, margin: 14 } as const;
+const AXIS = { width: 140, height: 112, arm: 30, margin: 14 } as const;
 const ROSE = { width: 168, height: 178, arm: 74, margin: 14 } as const;
 const PLUMB = { width: 104, height: 178, long: 84 } as const;
 /** A picture narrower or lower than this has no room for rose and plumb. */
 const ROOM = { width: 560, height: 420 } as const;
 /** Length of the largest C in External, m. */
-const ARROW = 0.62;
+const ARROW = 0.46;
 /** An arrow shorter than this (px) at its largest is drawn ten times as long, and says so. */
 const SHORTEST = 24;
-const LOWEST_LOOK = (86 * Math.PI) / 180;
 
 /** The whole picture of a drop: stage, person, arrows, instruments and cameras, for any renderer. */
 export class DropPicture {
@@ -58,12 +57,14 @@ export class DropPicture {
 	/** Drawn length of 1 m/s² of C on the rose, px. */
 	rosePixels = 0;
 	private readonly arrows = { C: createArrow("C"), K: createArrow("K"), E: createArrow("E") } as const;
-	private readonly axisPanel = createPanel(AXIS.panel, AXIS.panel);
+	private readonly axisPanel = createPanel(AXIS.width, AXIS.height);
 	private readonly axes = createAxisCue();
 	private readonly rosePanel = createPanel(ROSE.width, ROSE.height);
 	private readonly plumbPanel = createPanel(PLUMB.width, PLUMB.height);
 	private readonly plumb = createPlumb();
 	private readonly origin = new Float64Array(3);
+	private readonly drawn = new Float64Array(3);
+	private onRose = false;
 	private readonly pixel = new Float64Array(3);
 
 	constructor(
@@ -97,7 +98,7 @@ export class DropPicture {
 			fovEye: (75 * Math.PI) / 180,
 			azimuth: near ? lean : Math.PI + lean,
 			elevation: (11 * Math.PI) / 180,
-			distance: 3.05,
+			distance: 3.2,
 			pan: new Float64Array(3),
 			fovExternal: (48 * Math.PI) / 180,
 		};
@@ -116,16 +117,22 @@ export class DropPicture {
 		this.setMarks();
 	}
 
+	/** Along the gaze, with the head's own up: looking down keeps "in front" at the top. What the person at the screen turns comes on top. */
 	private aimEye(look: Look): void {
 		const { camera, figure } = this;
-		const eye = figure.eye;
-		for (let k = 0; k < 3; k++) camera.position[k] = eye.position[k] as number;
-		const [gx, gy, gz] = eye.gaze as unknown as [number, number, number];
-		const level = Math.hypot(gx, gz);
-		const heading = (level > 1e-6 ? Math.atan2(gz, gx) : this.stage.stance.facing) + look.yaw;
-		const elevation = Math.max(-LOWEST_LOOK, Math.min(LOWEST_LOOK, Math.atan2(gy, level) + look.pitch));
+		const { position, gaze, up } = figure.eye;
+		for (let k = 0; k < 3; k++) camera.position[k] = position[k] as number;
 		camera.fovY = look.fovEye;
-		aim(camera, Math.cos(elevation) * Math.cos(heading), Math.sin(elevation), Math.cos(elevation) * Math.sin(heading), 0, 1, 0);
+		const [ux, uy, uz] = up as unknown as [number, number, number];
+		aim(camera, gaze[0] as number, gaze[1] as number, gaze[2] as number, ux, uy, uz);
+		if (look.yaw === 0 && look.pitch === 0) return;
+		const b = camera.basis;
+		const c = Math.cos(look.pitch);
+		const right = c * Math.sin(look.yaw);
+		const above = Math.sin(look.pitch);
+		const ahead = c * Math.cos(look.yaw);
+		const part = (k: number): number => right * (b[k] as number) + above * (b[3 + k] as number) + ahead * (b[6 + k] as number);
+		aim(camera, part(0), part(1), part(2), b[3] as number, b[4] as number, b[5] as number);
 	}
 
 	private aimExternal(look: Look): void {
@@ -133,7 +140,7 @@ export class DropPicture {
 		const [fx, , fz] = stage.facingDirection;
 		const reach = 0.22;
 		const tx = fx * reach + (look.pan[0] as number);
-		const ty = 0.9 + (look.pan[1] as number);
+		const ty = 0.83 + (look.pan[1] as number);
 		const tz = fz * reach + (look.pan[2] as number);
 		const c = Math.cos(look.elevation);
 		const dx = c * Math.sin(look.azimuth);
@@ -171,6 +178,7 @@ export class DropPicture {
 		const minor = Math.max(greatest.coriolis, greatest.euler) * scale * perMetre;
 		this.minorFactor = minor > 0 && minor < SHORTEST ? 10 : 1;
 		const shown = flying && (view === "external" || room);
+		this.onRose = view === "eyepoint";
 		this.point("C", stage.forces.centrifugal, scale, head, shown);
 		this.point("K", stage.forces.coriolis, scale * this.minorFactor, head, shown);
 		this.point("E", stage.forces.euler, scale * this.minorFactor, head, shown && greatest.euler > 0);
@@ -186,7 +194,11 @@ export class DropPicture {
 			return;
 		}
 		const [x, y, z] = this.origin as unknown as [number, number, number];
-		arrow.set(x, y, z, (force[0] as number) / size, (force[1] as number) / size, (force[2] as number) / size, size * scale, head);
+		const v = this.drawn;
+		if (this.onRose) hudDirection(this.camera, this.origin, force[0] as number, force[1] as number, force[2] as number, v);
+		else v.set(force);
+		const l = Math.max(1e-9, Math.hypot(v[0] as number, v[1] as number, v[2] as number));
+		arrow.set(x, y, z, (v[0] as number) / l, (v[1] as number) / l, (v[2] as number) / l, l * scale, head);
 		anchor.visible = arrow.visible;
 		anchor.point.set(arrow.tip);
 	}
@@ -194,14 +206,15 @@ export class DropPicture {
 	private setInstruments(view: View, width: number, height: number, room: boolean): void {
 		const { camera, anchors, stage } = this;
 		const small = width < ROOM.width ? 0.72 : 1;
-		const middle = AXIS.margin + AXIS.panel / 2;
-		this.axisPanel.set(camera, width, height, width - middle, middle);
-		this.axes.set(camera, width, height, width - middle, middle + 6, AXIS.arm * small);
+		const axisX = width - AXIS.margin - AXIS.width / 2;
+		const axisY = AXIS.margin + AXIS.height / 2;
+		this.axisPanel.set(camera, width, height, axisX, axisY);
+		this.axes.set(camera, width, height, axisX, axisY + 4, AXIS.arm * small);
 		(["prograde", "up", "axial"] as const).forEach((name, i) => {
 			anchors[name].visible = true;
 			anchors[name].point.set(this.axes.tips[i] as Float64Array);
 		});
-		this.occupy(0, width - middle, middle, AXIS.panel, AXIS.panel, true);
+		this.occupy(0, axisX, axisY, AXIS.width, AXIS.height, true);
 		const rose = room && view === "eyepoint";
 		for (const p of this.rosePanel.parts) p.visible = rose;
 		const roseX = ROSE.margin + ROSE.width / 2;

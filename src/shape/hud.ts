@@ -44,6 +44,34 @@ function face(camera: Camera, width: number, height: number, px: number, py: num
 
 const scratch = new Float64Array(3);
 
+/**
+ * Writes how a stage direction is drawn at an instrument so that it looks as it would in the middle of
+ * the picture: what points along the camera's view is drawn along the line of sight to the instrument.
+ */
+export function hudDirection(camera: Camera, at: ArrayLike<number>, dx: number, dy: number, dz: number, out: Float64Array): void {
+	const b = camera.basis;
+	const p = camera.position;
+	const right = dx * (b[0] as number) + dy * (b[1] as number) + dz * (b[2] as number);
+	const above = dx * (b[3] as number) + dy * (b[4] as number) + dz * (b[5] as number);
+	const ahead = dx * (b[6] as number) + dy * (b[7] as number) + dz * (b[8] as number);
+	const rx = (at[0] as number) - (p[0] as number);
+	const ry = (at[1] as number) - (p[1] as number);
+	const rz = (at[2] as number) - (p[2] as number);
+	const l = Math.hypot(rx, ry, rz);
+	out[0] = right * (b[0] as number) + above * (b[3] as number) + (ahead * rx) / l;
+	out[1] = right * (b[1] as number) + above * (b[4] as number) + (ahead * ry) / l;
+	out[2] = right * (b[2] as number) + above * (b[5] as number) + (ahead * rz) / l;
+}
+
+const drawn = new Float64Array(3);
+/** `placeAlong` for an instrument: the direction as drawn there, its length kept in proportion. */
+function placeDrawn(camera: Camera, matrix: Float32Array, at: Float64Array, dx: number, dy: number, dz: number, size: number): void {
+	hudDirection(camera, at, dx, dy, dz, drawn);
+	const [x, y, z] = drawn as unknown as [number, number, number];
+	const l = Math.max(1e-6, Math.hypot(x, y, z));
+	placeAlong(matrix, at[0] as number, at[1] as number, at[2] as number, x / l, y / l, z / l, l * size, size);
+}
+
 export interface HudPanel {
 	readonly parts: readonly Part[];
 	/** Puts its middle at (px, py). */
@@ -129,11 +157,11 @@ export function createAxisCue(): AxisCue {
 			const [x, y, z] = origin as unknown as [number, number, number];
 			for (let i = 0; i < 3; i++) {
 				const [dx, dy, dz] = (AXES[i] as (typeof AXES)[number]).d;
-				placeAlong((lines[i] as Part).matrix, x, y, z, dx, dy, dz, long, long);
+				placeDrawn(camera, (lines[i] as Part).matrix, origin, dx, dy, dz, long);
 				const tip = tips[i] as Float64Array;
-				tip[0] = x + dx * long * 1.28;
-				tip[1] = y + dy * long * 1.28;
-				tip[2] = z + dz * long * 1.28;
+				tip[0] = x + (drawn[0] as number) * long * 1.28;
+				tip[1] = y + (drawn[1] as number) * long * 1.28;
+				tip[2] = z + (drawn[2] as number) * long * 1.28;
 			}
 		},
 	};
@@ -169,11 +197,10 @@ export function createPlumb(): Plumb {
 		set(camera, width, height, px, py, long, gx, gy, gz) {
 			hudPoint(camera, width, height, px, py, origin);
 			const size = long * metresPerPixel(camera, height);
-			const [x, y, z] = origin as unknown as [number, number, number];
-			placeAlong(deckLine.matrix, x, y, z, 0, -1, 0, size, size);
-			placeAlong(bracket.matrix, x, y, z, 0, -1, 0, size, size);
-			placeAlong(string.matrix, x, y, z, gx, gy, gz, size, size);
-			placeAlong(bob.matrix, x, y, z, gx, gy, gz, size, size);
+			placeDrawn(camera, deckLine.matrix, origin, 0, -1, 0, size);
+			placeDrawn(camera, bracket.matrix, origin, 0, -1, 0, size);
+			placeDrawn(camera, string.matrix, origin, gx, gy, gz, size);
+			placeDrawn(camera, bob.matrix, origin, gx, gy, gz, size);
 		},
 		setVisible(visible) {
 			for (const p of parts) p.visible = visible;

@@ -1,7 +1,7 @@
 import type { Triangles, WideLines } from "./drawable.ts";
 import type { ColourIndex } from "./palette.ts";
 
-type Look = Partial<Pick<Triangles, "side" | "lit" | "opacity" | "decal">>;
+type Look = Partial<Pick<Triangles, "side" | "lit" | "opacity" | "decal" | "over">>;
 
 /** A float array that doubles when full. */
 class Floats {
@@ -76,6 +76,7 @@ export class MeshBuilder {
 			lit: look.lit ?? true,
 			opacity: look.opacity ?? 1,
 			decal: look.decal ?? false,
+			...(look.over ? { over: true } : {}),
 		};
 	}
 }

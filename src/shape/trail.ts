@@ -17,8 +17,8 @@ export const DOT_EVERY = 0.1;
 /** Segments a second; a long flight is drawn coarser. */
 const FINE = 120;
 const MOST_SEGMENTS = 2400;
-const DOT_STACKS = 4;
-const DOT_SLICES = 8;
+const DOT_STACKS = 6;
+const DOT_SLICES = 12;
 
 interface TrailLook {
 	readonly name: string;
@@ -87,5 +87,5 @@ function dot(mesh: MeshBuilder, centre: readonly number[], radius: number, colou
 		}
 }
 
-export const OBJECT_TRAIL: TrailLook = { name: "trail", colour: COLOUR.ink, width: 2.2, dotRadius: 0.011, dash: null, opacity: 1 };
-export const GHOST_TRAIL: TrailLook = { name: "ghost", colour: COLOUR.muted, width: 1.6, dotRadius: 0.007, dash: [0.035, 0.03], opacity: 0.6 };
+export const OBJECT_TRAIL: TrailLook = { name: "trail", colour: COLOUR.ink, width: 2.2, dotRadius: 0.0085, dash: null, opacity: 1 };
+export const GHOST_TRAIL: TrailLook = { name: "ghost", colour: COLOUR.muted, width: 1.6, dotRadius: 0.006, dash: [0.035, 0.03], opacity: 0.6 };
