@@ -18,13 +18,13 @@ export interface Block {
 	readonly end: Float64Array;
 }
 
-/** out = a b for upper triangular matrices of ROW × ROW. */
+/** out = a b for upper triangular matrices of ROW × ROW; out is neither. */
 function multiply(a: Float64Array, b: Float64Array, out: Float64Array): void {
+	out.fill(0);
 	for (let i = 0; i < ROW; i++)
-		for (let j = i; j < ROW; j++) {
-			let sum = 0;
-			for (let k = i; k <= j; k++) sum += (a[ROW * i + k] as number) * (b[ROW * k + j] as number);
-			out[ROW * i + j] = sum;
+		for (let k = i; k < ROW; k++) {
+			const f = a[ROW * i + k] as number;
+			for (let j = k; j < ROW; j++) out[ROW * i + j] = (out[ROW * i + j] as number) + f * (b[ROW * k + j] as number);
 		}
 }
 

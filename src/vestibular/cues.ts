@@ -20,8 +20,8 @@ export interface HeadTurnCues {
 export function headTurnCues(turn: HeadTurn, spin: Spin, spinAxis: HeadVec, constants: CanalConstants, samples: Samples): HeadTurnCues {
 	if (samples.from > 0) throw new RangeError(`the cues of a head turn are followed from its start, not from ${samples.from} s`);
 	const breaks = { breaks: [0, turn.duration] };
-	const report = canalReport((t) => headRate(turn, spin, spinAxis, t), samples, constants, breaks);
-	const illusion = canalReport((t) => spinInHead(turn, spin, spinAxis, t), samples, constants, breaks);
+	const report = canalReport(headRate(turn, spin, spinAxis), samples, constants, breaks);
+	const illusion = canalReport(spinInHead(turn, spin, spinAxis), samples, constants, breaks);
 	const own = new Float64Array(3 * samples.count);
 	const disagreement = new Float64Array(samples.count);
 	for (let i = 0; i < samples.count; i++) {

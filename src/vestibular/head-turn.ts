@@ -1,5 +1,5 @@
 import { minimumJerk, type Spin } from "../frame/spin.ts";
-import { cross, dot, type HeadVec, head, length, scale } from "../vector/vec3.ts";
+import { along, cross, dot, type HeadVec, head, length, scale, sub } from "../vector/vec3.ts";
 import { peakOf } from "./peak.ts";
 
 export type TurnAxis = "yaw" | "pitch" | "roll";
@@ -29,31 +29,40 @@ export const turnAngle = (turn: HeadTurn, t: number): number => turn.angle * min
 export const turnRate = (turn: HeadTurn, t: number): number => (turn.angle / turn.duration) * minimumJerk.rate(share(turn, t));
 
 /** Rᵀ(t) v: a vector that stands still in the ring, as the turning head sees it; v in head axes at t = 0. */
-export function seenByHead(turn: HeadTurn, t: number, v: HeadVec): HeadVec {
-	const a = turnAngle(turn, t);
-	if (a === 0) return v;
+export function seenByHead(turn: HeadTurn, v: HeadVec): (t: number) => HeadVec {
 	const k = turn.axis;
-	const c = Math.cos(a);
-	const s = Math.sin(a);
-	const p = dot(k, v) * (1 - c);
-	const kv = cross(k, v);
-	return head(v[0] * c - kv[0] * s + k[0] * p, v[1] * c - kv[1] * s + k[1] * p, v[2] * c - kv[2] * s + k[2] * p);
+	const kept = scale(k, dot(k, v));
+	const across = sub(v, kept);
+	const ahead = cross(k, v);
+	const turned = (a: number): HeadVec => {
+		const c = Math.cos(a);
+		const s = Math.sin(a);
+		return head(kept[0] + c * across[0] - s * ahead[0], kept[1] + c * across[1] - s * ahead[1], kept[2] + c * across[2] - s * ahead[2]);
+	};
+	const end = turned(turn.angle);
+	return (t) => (t <= 0 ? v : t >= turn.duration ? end : turned(turnAngle(turn, t)));
 }
 
-/** The part of the head's absolute angular velocity that the spin gives it, Rᵀ(t)Ω, rad/s. `spinAxis`: unit, head axes at t = 0. */
-export const spinInHead = (turn: HeadTurn, spin: Spin, spinAxis: HeadVec, t: number): HeadVec =>
-	scale(seenByHead(turn, t, spinAxis), spin.rate(t));
+/**
+ * The part of the head's absolute angular velocity that the spin gives it, Rᵀ(t)Ω, rad/s. `spinAxis`:
+ * unit, head axes at t = 0.
+ */
+export function spinInHead(turn: HeadTurn, spin: Spin, spinAxis: HeadVec): (t: number) => HeadVec {
+	if (spin.constant) return seenByHead(turn, scale(spinAxis, spin.rate(0)));
+	const axis = seenByHead(turn, spinAxis);
+	return (t) => scale(axis(t), spin.rate(t));
+}
 
 /** ω(t) = Rᵀ(t)Ω + ω_turn, head axes, rad/s. */
-export function headRate(turn: HeadTurn, spin: Spin, spinAxis: HeadVec, t: number): HeadVec {
-	const s = spinInHead(turn, spin, spinAxis, t);
-	const w = turnRate(turn, t);
-	return head(s[0] + w * turn.axis[0], s[1] + w * turn.axis[1], s[2] + w * turn.axis[2]);
+export function headRate(turn: HeadTurn, spin: Spin, spinAxis: HeadVec): (t: number) => HeadVec {
+	const fromSpin = spinInHead(turn, spin, spinAxis);
+	return (t) => (t <= 0 || t >= turn.duration ? fromSpin(t) : along(fromSpin(t), turnRate(turn, t), turn.axis));
 }
 
 /** Cross-coupled angular acceleration Ω × ω_turn, head axes, rad/s²: the rate of change of Rᵀ(t)Ω at steady spin. */
-export function crossCoupled(turn: HeadTurn, spin: Spin, spinAxis: HeadVec, t: number): HeadVec {
-	return cross(spinInHead(turn, spin, spinAxis, t), scale(turn.axis, turnRate(turn, t)));
+export function crossCoupled(turn: HeadTurn, spin: Spin, spinAxis: HeadVec): (t: number) => HeadVec {
+	const fromSpin = spinInHead(turn, spin, spinAxis);
+	return (t) => cross(fromSpin(t), scale(turn.axis, turnRate(turn, t)));
 }
 
 /** Its greatest size over the turn, rad/s²: Ω · 1.875 |a| / T · sin γ at steady spin, else the greatest of Ω(t) ω_turn(t) sin γ. */
@@ -61,7 +70,9 @@ export function crossCoupledPeak(turn: HeadTurn, spin: Spin, spinAxis: HeadVec):
 	const sine = length(cross(spinAxis, turn.axis));
 	const { duration, angle } = turn;
 	if (spin.constant) return (spin.rate(0) * minimumJerk.peakRate * Math.abs(angle) * sine) / duration;
-	const size = (t: number): number => spin.rate(t) * Math.abs(turnRate(turn, t)) * sine;
-	const sizes = Array.from({ length: 1025 }, (_, i) => size((duration * i) / 1024));
+	const sizes = Array.from({ length: 1025 }, (_, i) => {
+		const t = (duration * i) / 1024;
+		return spin.rate(t) * Math.abs(turnRate(turn, t)) * sine;
+	});
 	return peakOf(sizes).value;
 }

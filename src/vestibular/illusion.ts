@@ -27,7 +27,7 @@ export interface Illusion {
 }
 
 const illusionFilter = (turn: HeadTurn, spin: Spin, spinAxis: HeadVec, constants: CanalConstants): CanalFilter =>
-	headAxesFilter((t) => spinInHead(turn, spin, spinAxis, t), constants, 0, { breaks: [0, turn.duration] });
+	headAxesFilter(spinInHead(turn, spin, spinAxis), constants, 0, { breaks: [0, turn.duration] });
 
 /** Lengths of 3 numbers each. */
 const sizes = (v: Float64Array): Float64Array =>

@@ -16,14 +16,14 @@ const turnPeaking = (degps: number): HeadTurn => ({ axis: TURN_AXES.yaw, angle: 
 /** Cross-coupled acceleration at that peak, spin axis on the left as at mid-turn, head axes. */
 function atPeak(rpm: number, degps: number): HeadVec {
 	const turn = turnPeaking(degps);
-	const ahead = spinInHead({ ...turn, angle: -turn.angle }, constantSpin(1), SIDE, turn.duration / 2);
-	return crossCoupled(turn, constantSpin(radpsFromRpm(rpm)), ahead, turn.duration / 2);
+	const ahead = spinInHead({ ...turn, angle: -turn.angle }, constantSpin(1), SIDE)(turn.duration / 2);
+	return crossCoupled(turn, constantSpin(radpsFromRpm(rpm)), ahead)(turn.duration / 2);
 }
 
 const changeOver = (deg: number): number => {
 	const turn: HeadTurn = { axis: TURN_AXES.yaw, angle: radFromDeg(deg), duration: 0.8 };
 	const spin = constantSpin(radpsFromRpm(4));
-	return degFromRad(length(sub(spinInHead(turn, spin, SIDE, turn.duration), spinInHead(turn, spin, SIDE, 0))));
+	return degFromRad(length(sub(spinInHead(turn, spin, SIDE)(turn.duration), spinInHead(turn, spin, SIDE)(0))));
 };
 
 const angleBetween = (a: HeadVec, b: HeadVec): number => degFromRad(Math.atan2(length(cross(a, b)), dot(a, b)));
@@ -42,7 +42,7 @@ const PENDULUM = "e^(−t/τ) with τ of Rader, Oman & Merfeld 2009 (5.7 s) and 
 /** Forward part of the canals' report of a yaw of 90° to the left in 0.8 s at 4 rpm, spin axis on the right, at t s: ours and odex's. */
 function headTurnReport(): { t: number; ours: number; odex: number }[] {
 	const turn: HeadTurn = { axis: TURN_AXES.yaw, angle: radFromDeg(90), duration: 0.8 };
-	const rate = (t: number): HeadVec => headRate(turn, constantSpin(radpsFromRpm(4)), head(0, -1, 0), t);
+	const rate = headRate(turn, constantSpin(radpsFromRpm(4)), head(0, -1, 0));
 	const times = [0.2, 0.4, 0.6, 0.8, 2, 8];
 	const report = canalReport(rate, { from: 0, step: 0.1, count: 81 }, DEFAULT_CONSTANTS, { breaks: [0, turn.duration] });
 	const reference = integrated(rate, rate(0), DEFAULT_CONSTANTS, 0, times);

@@ -65,13 +65,13 @@ describe("head turn", () => {
 		const turn: HeadTurn = { axis: TURN_AXES[name], angle: 1.1, duration: 2 };
 		const v = head(0.3, -0.8, 0.5);
 		const back = rotate(inverse(about(turnAngle(turn, 1.3)) as Rotation<"head", "head">), v);
-		for (const k of [0, 1, 2] as const) expect(seenByHead(turn, 1.3, v)[k]).toBeCloseTo(back[k], 14);
+		for (const k of [0, 1, 2] as const) expect(seenByHead(turn, v)(1.3)[k]).toBeCloseTo(back[k], 14);
 	});
 
 	it("changes the spin it sees by 2 Ω sin γ sin(a/2) (seed 101)", () => {
 		fc.assert(
 			fc.property(turns, direction, (turn, axis) => {
-				const change = sub(spinInHead(turn, spin, axis, turn.duration), spinInHead(turn, spin, axis, 0));
+				const change = sub(spinInHead(turn, spin, axis)(turn.duration), spinInHead(turn, spin, axis)(0));
 				const sine = length(cross(axis, turn.axis));
 				expect(length(change)).toBeCloseTo(2 * spin.rate(0) * sine * Math.abs(Math.sin(turn.angle / 2)), 12);
 			}),
@@ -84,8 +84,8 @@ describe("head turn", () => {
 			fc.property(turns, direction, fc.double({ min: 0.05, max: 0.95, noNaN: true }), (turn, axis, x) => {
 				const t = x * turn.duration;
 				const d = 1e-5 * turn.duration;
-				const change = scale(sub(spinInHead(turn, spin, axis, t + d), spinInHead(turn, spin, axis, t - d)), 1 / (2 * d));
-				const said = crossCoupled(turn, spin, axis, t);
+				const change = scale(sub(spinInHead(turn, spin, axis)(t + d), spinInHead(turn, spin, axis)(t - d)), 1 / (2 * d));
+				const said = crossCoupled(turn, spin, axis)(t);
 				expect(length(sub(said, change))).toBeLessThan(1e-6 * (1 + length(said)));
 				expect(Math.abs(dot(said, turn.axis))).toBeLessThan(1e-12 * (1 + length(said)));
 				expect(length(said)).toBeLessThanOrEqual(crossCoupledPeak(turn, spin, axis) * (1 + 1e-12) + 1e-15);
@@ -96,7 +96,7 @@ describe("head turn", () => {
 
 	it("its peak is at mid-turn at steady spin, none about the spin axis, and follows a changing spin", () => {
 		const turn: HeadTurn = { axis: TURN_AXES.yaw, angle: -1.2, duration: 0.7 };
-		expect(crossCoupledPeak(turn, spin, head(1, 0, 0))).toBeCloseTo(length(crossCoupled(turn, spin, head(1, 0, 0), 0.35)), 13);
+		expect(crossCoupledPeak(turn, spin, head(1, 0, 0))).toBeCloseTo(length(crossCoupled(turn, spin, head(1, 0, 0))(0.35)), 13);
 		expect(crossCoupledPeak(turn, spin, head(0, 0, 1))).toBe(0);
 		const level = profileSpin([
 			{ t: 0, rate: spin.rate(0) },
@@ -109,19 +109,19 @@ describe("head turn", () => {
 			{ t: 0.7, rate: 0 },
 		]);
 		let brute = 0;
-		for (let t = 0; t <= 0.7; t += 1e-5) brute = Math.max(brute, length(crossCoupled(turn, falling, head(1, 0, 0), t)));
+		for (let t = 0; t <= 0.7; t += 1e-5) brute = Math.max(brute, length(crossCoupled(turn, falling, head(1, 0, 0))(t)));
 		expect(crossCoupledPeak(turn, falling, head(1, 0, 0))).toBeCloseTo(brute, 8);
 	});
 
 	it("the absolute rate is that of the product of both turns (seed 103)", () => {
 		/** Head to inertial: spin about the axis by Ωt, then the turn in the ring. */
 		const attitude = (turn: HeadTurn, axis: HeadVec, t: number, v: HeadVec): HeadVec =>
-			seenByHead({ axis, angle: -spin.angle(t), duration: 1 }, 1, seenByHead({ ...turn, angle: -turn.angle }, t, v));
+			seenByHead({ axis, angle: -spin.angle(t), duration: 1 }, seenByHead({ ...turn, angle: -turn.angle }, v)(t))(1);
 		fc.assert(
 			fc.property(turns, direction, fc.double({ min: 0.1, max: 0.9, noNaN: true }), (turn, axis, x) => {
 				const t = x * turn.duration;
 				const d = 1e-5 * turn.duration;
-				const omega = headRate(turn, spin, axis, t);
+				const omega = headRate(turn, spin, axis)(t);
 				for (const v of [head(1, 0, 0), head(0, 1, 0), head(0, 0, 1)]) {
 					const moved = scale(sub(attitude(turn, axis, t + d, v), attitude(turn, axis, t - d, v)), 1 / (2 * d));
 					const said = attitude(turn, axis, t, cross(omega, v));

@@ -16,13 +16,13 @@ const LEFT: HeadTurn = { axis: TURN_AXES.yaw, angle: radFromDeg(90), duration: 0
 const PROGRADE = spinAxisInHead(0);
 const ADAPTING: CanalConstants = { ...DEFAULT_CONSTANTS, adaptation: 80 };
 
-const spun = (t: number): readonly number[] => headRate(LEFT, FOUR_RPM, PROGRADE, t);
+const spun: (t: number) => readonly number[] = headRate(LEFT, FOUR_RPM, PROGRADE);
 const sizeAt = (v: ArrayLike<number>, i: number): number => Math.hypot(v[3 * i] as number, v[3 * i + 1] as number, v[3 * i + 2] as number);
 
 describe("report of a head turn at 4 rpm", () => {
 	const wanted = [...Array.from({ length: 17 }, (_, i) => i * 0.05), 1, 1.5, 2, 4, 8];
 	const ours = (): number[] => {
-		const report = canalReport((t) => headRate(LEFT, FOUR_RPM, PROGRADE, t), { from: 0, step: 0.05, count: 161 }, DEFAULT_CONSTANTS, {
+		const report = canalReport(headRate(LEFT, FOUR_RPM, PROGRADE), { from: 0, step: 0.05, count: 161 }, DEFAULT_CONSTANTS, {
 			breaks: [0, LEFT.duration],
 		});
 		return wanted.flatMap((t) => [...report.subarray(3 * Math.round(t / 0.05), 3 * Math.round(t / 0.05) + 3)]);
@@ -68,7 +68,7 @@ describe("cross-coupled illusion", () => {
 		const found = crossCoupledIllusion(fast, FOUR_RPM, PROGRADE, DEFAULT_CONSTANTS, THRESHOLD);
 		expect(degFromRad(found.peak)).toBeGreaterThan(33.941 * 0.98);
 		expect(degFromRad(found.peak)).toBeLessThan(33.941);
-		const after = canalReport((t) => spinInHead(fast, FOUR_RPM, PROGRADE, t), { from: 0, step: 1.05, count: 2 }, DEFAULT_CONSTANTS, {
+		const after = canalReport(spinInHead(fast, FOUR_RPM, PROGRADE), { from: 0, step: 1.05, count: 2 }, DEFAULT_CONSTANTS, {
 			breaks: [0, 0.05],
 		});
 		expect(found.settle).toBeCloseTo(1 + 5.7 * Math.log(sizeAt(after, 1) / THRESHOLD), 7);
@@ -81,7 +81,7 @@ describe("cross-coupled illusion", () => {
 		["a slow turn back", { ...LEFT, angle: -1, duration: 12 }, ADAPTING],
 	] as const)("peak, axis and settling are those of a dense odex run (%s)", (_, turn, constants) => {
 		const found = crossCoupledIllusion(turn, FOUR_RPM, PROGRADE, constants, THRESHOLD);
-		const input = (t: number): readonly number[] => spinInHead(turn, FOUR_RPM, PROGRADE, t);
+		const input: (t: number) => readonly number[] = spinInHead(turn, FOUR_RPM, PROGRADE);
 		const step = 0.0005;
 		const start = Math.max(0, found.peakTime - 5 * step);
 		const dense = Array.from({ length: 11 }, (_, i) => start + i * step);
@@ -147,7 +147,7 @@ describe("cross-coupled illusion", () => {
 	});
 
 	it("facing prograde at 4 rpm, a yaw to the left is felt as a roll of the left ear up at first", () => {
-		const early = canalReport((t) => spinInHead(LEFT, FOUR_RPM, PROGRADE, t), { from: 0, step: 0.2, count: 2 }, DEFAULT_CONSTANTS, {
+		const early = canalReport(spinInHead(LEFT, FOUR_RPM, PROGRADE), { from: 0, step: 0.2, count: 2 }, DEFAULT_CONSTANTS, {
 			breaks: [0, 0.8],
 		});
 		expect(Math.abs(early[3] as number)).toBeGreaterThan(5 * Math.abs(early[4] as number));
