@@ -43,7 +43,13 @@ export default defineConfig(({ mode }) => {
 			dedupe: ["three", "react", "react-dom", "@react-three/fiber"],
 			alias: testing ? [{ find: /^@react-three\/fiber$/, replacement: fiber }] : [],
 		},
-		build: { outDir: here("dist/app"), emptyOutDir: true, target: "es2023", modulePreload: { polyfill: false } },
+		build: {
+			outDir: here("dist/app"),
+			emptyOutDir: true,
+			target: "es2023",
+			modulePreload: { polyfill: false },
+			chunkSizeWarningLimit: 1000,
+		},
 		test: {
 			environment: "node",
 			include: mode === "long" ? ["test/**/*.long.test.{ts,tsx}"] : ["test/**/*.test.{ts,tsx}"],
