@@ -1,6 +1,7 @@
 import type { Series, SummaryValue } from "./activity/result.ts";
 import type { Assessed, AssessedCase } from "./assess.ts";
 import type { Finding } from "./criteria/row.ts";
+import type { Overridden } from "./layout/assumptions.ts";
 
 export const ASSESSMENT_FORMAT = "offplumb-assessment";
 export const ASSESSMENT_VERSION = 1;
@@ -11,6 +12,8 @@ export interface AssessmentDocument {
 	readonly version: typeof ASSESSMENT_VERSION;
 	readonly layout: { readonly title: string; readonly sha256: string };
 	readonly tool: { readonly version: string };
+	/** Assumptions that the layout replaces, with the value used. */
+	readonly assumptions: readonly Overridden[];
 	readonly activities: readonly AssessmentActivity[];
 	readonly findings: readonly Finding[];
 }
@@ -32,6 +35,7 @@ export function assessmentDocument(assessed: Assessed, toolVersion: string, seri
 		version: ASSESSMENT_VERSION,
 		layout: { title: assessed.layout.title, sha256: assessed.sha256 },
 		tool: { version: toolVersion },
+		assumptions: assessed.overridden,
 		activities: assessed.cases.map((c) => {
 			const samples = series?.(c) ?? null;
 			return { id: c.id, kind: c.kind, crew: c.crew, phase: c.phase, summary: c.summary, reasons: c.reasons, ...(samples ? { series: samples } : {}) };

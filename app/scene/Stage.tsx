@@ -1,7 +1,7 @@
 import { useCallback, useEffect, useMemo, useRef, useState } from "react";
 import { DropFigure } from "../../src/shape/drop-figure.ts";
 import { DropPicture } from "../../src/shape/drop-picture.ts";
-import { DropStage, stanceOf } from "../../src/shape/drop-stage.ts";
+import { DropStage } from "../../src/shape/drop-stage.ts";
 import type { Stars } from "../../src/shape/drawable.ts";
 import { listenKeys } from "../control/keys.ts";
 import { currentLook, lookFor, onLook } from "../control/look.ts";
@@ -14,18 +14,14 @@ import { useSession } from "../store/session.ts";
 import { useStars } from "../store/stars.ts";
 import { advance, onTime, transient } from "../store/transient.ts";
 import { Conductor } from "./conductor.ts";
+import { offerProbe } from "./probe-stage.ts";
 import { usePainter } from "./usePainter.ts";
 
 /** The picture of a case; null where its kind is not built. */
 function pictureOf(c: AssessedCase, stars: Stars): DropPicture | null {
-	if (!c.motion || c.file.kind !== "drop") return null;
+	if (!c.motion) return null;
 	const { context, motion } = c;
-	const heading = c.file.release ? (c.file.release.heading_deg * Math.PI) / 180 : null;
-	const stance = stanceOf(motion, context.person.stature, heading);
-	return new DropPicture(
-		new DropStage(context.habitat, context.spin, motion, stance, stars),
-		new DropFigure(motion, stance, context.person.stature),
-	);
+	return new DropPicture(new DropStage(context.habitat, context.spin, motion, stars), new DropFigure(motion, context.person.stature));
 }
 
 /** The stage: canvas, controls and labels of the selected case. */
@@ -74,6 +70,7 @@ export function Stage() {
 	// biome-ignore lint/correctness/useExhaustiveDependencies: another picture or view is what makes a frame due
 	useEffect(() => conductor.wake(), [conductor, picture, view]);
 
+	useEffect(() => offerProbe(conductor, () => live.current), [conductor]);
 	const canvas = usePainter(conductor);
 	const take = useCallback(
 		(next: LabelPlacer | null) => {

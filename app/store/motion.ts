@@ -1,32 +1,12 @@
+import { eventsOfDrop, type MotionEvent } from "../../src/activity/drop.ts";
 import { type Deck, deckTriad, heightAbove } from "../../src/layout/habitat.ts";
-import { degFromRad } from "../../src/quantity/convert.ts";
 import { dot, type RingVec, ring, sub } from "../../src/vector/vec3.ts";
 import type { AssessedCase } from "./core.ts";
 
-/** What happens at an instant, on the case's clock. */
-export interface MotionEvent {
-	readonly t: number;
-	readonly name: string;
-}
-
-const STRIKES: Readonly<Record<string, string>> = {
-	deck: "lands",
-	ceiling: "strikes the ceiling",
-	coaming: "strikes the coaming",
-	element: "is struck",
-	outside: "leaves the bay",
-	none: "is no longer followed",
-};
+export type { MotionEvent };
 
 /** Events of a motion in order, the release first; empty where the kind is not built. */
-export function eventsOf(c: AssessedCase): readonly MotionEvent[] {
-	if (!c.motion) return [];
-	const { struck, end } = c.motion.flight;
-	return [
-		{ t: 0, name: "release" },
-		{ t: end, name: STRIKES[struck.kind] ?? "strikes a bulkhead" },
-	];
-}
+export const eventsOf = (c: AssessedCase): readonly MotionEvent[] => (c.motion ? eventsOfDrop(c.motion) : []);
 
 /** Length of the case's clock, s; 0 where the kind is not built. */
 export const durationOf = (c: AssessedCase): number => c.motion?.flight.end ?? 0;
@@ -68,6 +48,3 @@ export function dropTrace(c: AssessedCase): DropTrace | null {
 }
 
 const alongFlat = (deck: Deck, from: RingVec, p: RingVec): number => dot(sub(p, from), deckTriad(deck, deck.middle).prograde);
-
-/** Heading the person faces in a case, degrees, or null where the layout does not say. */
-export const facingDeg = (c: AssessedCase): number | null => (c.motion?.feet ? degFromRad(c.motion.feet.facing) : null);

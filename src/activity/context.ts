@@ -1,5 +1,6 @@
 import type { World } from "../flight/world.ts";
 import type { Spin } from "../frame/spin.ts";
+import type { CanalConstants } from "../vestibular/constants.ts";
 import type { Habitat } from "../layout/habitat.ts";
 
 /** What every activity is computed in: one habitat, one spin, one person. SI. */
@@ -11,6 +12,7 @@ export interface Context {
 	/** The phase, and whether its rate changes during the activity. */
 	readonly phase: string;
 	readonly person: Person;
+	readonly canals: CanalConstants;
 }
 
 export interface Person {

@@ -3,13 +3,14 @@ import { type Flight, fly } from "../flight/fly.ts";
 import { type Ghost, ghostOf } from "../flight/ghost.ts";
 import { fromFeet, type Landing, landing } from "../flight/landing.ts";
 import { type Cylindrical, cylindricalFromRing, directionOf, localFromRing, ringFromLocal } from "../frame/place.ts";
-import { type Deck, deckTriad, placeOnDeck } from "../layout/habitat.ts";
+import { angleNear, type Deck, deckTriad, placeOnDeck } from "../layout/habitat.ts";
 import type { ActivityOf } from "../layout/schema.ts";
 import { STANDARD_GRAVITY } from "../quantity/constants.ts";
 import { degFromRad, radFromDeg, rpmFromRadps } from "../quantity/convert.ts";
 import { type LocalVec, type RingVec, ring, scale } from "../vector/vec3.ts";
 import type { Context } from "./context.ts";
 import type { CaseSummary, Derivation } from "./result.ts";
+import { givenStance, stanceAtHand, type Stance } from "./stance.ts";
 import { derive, put, SummaryWriter } from "./summary.ts";
 
 export type { Path } from "../flight/path.ts";
@@ -26,18 +27,11 @@ export interface Drop {
 	readonly flight: Flight;
 	readonly landing: Landing | null;
 	readonly ghost: Ghost;
-	/** Where the person stands; null where the layout does not say. */
-	readonly feet: Feet | null;
+	/** ½ ρ C_d A / m, 1/m; 0 where the air is left out. */
+	readonly drag: number;
+	/** Where the person stands: as the layout says, else so that the hand is at the release. */
+	readonly stance: Stance;
 	readonly fromFeet: { readonly prograde: number | null; readonly axial: number | null } | null;
-}
-
-export interface Feet {
-	readonly angle: number;
-	readonly axial: number;
-	/** Heading, rad. */
-	readonly facing: number;
-	/** Ring position of the floor point between the feet. */
-	readonly position: RingVec;
 }
 
 /** Flies the object of a drop activity and finds where it lands, with and without turning. */
@@ -52,7 +46,9 @@ export function computeDrop(context: Context, file: DropFile): Drop {
 	const drag = file.drag ? dragFactor(airDensity(habitat.air), drag_coefficient, diameter, mass) : 0;
 	const flight = fly(world, spin, { deck: deck.index, position, velocity, diameter, drag });
 	const found = landing(habitat, flight, deck, position);
-	const feet = file.feet ? feetAt(deck, file.feet) : null;
+	const stance = file.feet
+		? givenStance(deck, angleNear(radFromDeg(file.feet.angle_deg), deck.middle), file.feet.axial_m, radFromDeg(file.feet.facing_deg))
+		: stanceAtHand(deck, position, context.person.stature, radFromDeg(file.release?.heading_deg ?? 0));
 	return {
 		kind: "drop",
 		deck,
@@ -62,8 +58,9 @@ export function computeDrop(context: Context, file: DropFile): Drop {
 		flight,
 		landing: found,
 		ghost: ghostOf(deck, spin.rate(0), position, velocity, diameter, drag),
-		feet,
-		fromFeet: found && feet ? fromFeet(habitat, flight, found, deck, position, feet.position) : null,
+		drag,
+		stance,
+		fromFeet: found && stance.given ? fromFeet(habitat, flight, found, deck, position, stance.position) : null,
 	};
 }
 
@@ -77,17 +74,40 @@ function releaseVelocity(deck: Deck, angle: number, file: DropFile): RingVec {
 	return scale(ringFromLocal(deckTriad(deck, angle), directionOf(radFromDeg(heading_deg), radFromDeg(elevation_deg))), speed_mps);
 }
 
-function feetAt(deck: Deck, feet: NonNullable<DropFile["feet"]>): Feet {
-	const angle = radFromDeg(feet.angle_deg);
-	return { angle, axial: feet.axial_m, facing: radFromDeg(feet.facing_deg), position: placeOnDeck(deck, angle, feet.axial_m, 0) };
-}
-
 /** The name of what was struck, as the assessment writes it. */
 export function struckName(flight: Flight, habitat: Context["habitat"]): string {
 	const { struck } = flight;
 	if (struck.kind === "outside" || struck.kind === "none") return struck.kind;
 	if (struck.kind === "coaming" || struck.kind === "element") return `${struck.kind}:${struck.id}`;
 	return `${struck.kind}:${(habitat.decks[struck.deck] as Deck).id}`;
+}
+
+/** What happens at an instant, s from the release. */
+export interface MotionEvent {
+	readonly t: number;
+	readonly name: string;
+}
+
+const STRIKES: Readonly<Record<Flight["struck"]["kind"], string>> = {
+	deck: "lands",
+	ceiling: "strikes the ceiling",
+	"end-low": "strikes a bulkhead",
+	"end-high": "strikes a bulkhead",
+	"side-low": "strikes a bulkhead",
+	"side-high": "strikes a bulkhead",
+	coaming: "strikes the coaming",
+	element: "is struck",
+	outside: "leaves the bay",
+	none: "is no longer followed",
+};
+
+/** Events of a drop in order: the release, every hatch gone through, the end. */
+export function eventsOfDrop({ flight }: Drop): readonly MotionEvent[] {
+	return [
+		{ t: 0, name: "release" },
+		...flight.passed.map((id, i) => ({ t: flight.passedAt[i] as number, name: `passes ${id}` })),
+		{ t: flight.end, name: flight.struck.kind === "element" ? `strikes ${flight.struck.id}` : STRIKES[flight.struck.kind] },
+	];
 }
 
 const NOTHING_STRUCK = "nothing was struck";
@@ -141,13 +161,13 @@ export function summariseDrop(context: Context, file: DropFile, drop: Drop): Cas
 	return writer.done();
 
 	function feetNumbers(to: SummaryWriter, d: Drop, reason: string): void {
-		const missing = d.feet ? reason : "the layout does not say where the person stands";
+		const missing = d.stance.given ? reason : "the layout does not say where the person stands";
 		const offset = (kind: "prograde" | "axial", from: number | null): Derivation =>
 			derive("from-feet", [
 				put("s", "offset from the point below the release", from ?? "none", "m"),
 				put("s_release − s_feet₀", "from the feet to the point below the release", from !== null && d.fromFeet?.[kind] != null ? d.fromFeet[kind] - from : "none", "m"),
 			]);
-		const bulkhead = found && d.feet ? "that bulkhead has no such direction of its own" : missing;
+		const bulkhead = found && d.stance.given ? "that bulkhead has no such direction of its own" : missing;
 		to.number("landing_from_feet_prograde_m", d.fromFeet?.prograde ?? null, bulkhead, offset("prograde", found?.prograde ?? null));
 		to.number("landing_from_feet_axial_m", d.fromFeet?.axial ?? null, bulkhead, offset("axial", found?.axial ?? null));
 	}

@@ -22,7 +22,7 @@ export interface DerivationInput {
 
 /** Samples against time, keys and units as the contract names them. */
 export interface Series {
-	readonly [key: string]: readonly number[] | readonly (readonly number[])[] | readonly SeriesEvent[];
+	readonly [key: string]: readonly (number | null)[] | readonly (readonly number[])[] | readonly SeriesEvent[];
 }
 export interface SeriesEvent {
 	readonly t_s: number;

@@ -4,6 +4,6 @@ import { type Call, only } from "./call.ts";
 
 export async function newCommand(call: Call): Promise<number> {
 	only(call, "new", [], 1);
-	process.stdout.write(writeLayout(newLayout(call.positionals[0])));
+	process.stdout.write(writeLayout(newLayout(call.positionals[0] ?? "New layout")));
 	return 0;
 }

@@ -20,6 +20,7 @@ const shown = (value: SummaryValue | undefined, unit: string): string => {
 export function assessmentTable(assessed: Assessed, colour: boolean): string {
 	const bold = (s: string): string => (colour ? styleText("bold", s) : s);
 	const out: string[] = [bold(assessed.layout.title), `sha256 ${assessed.sha256}`, ""];
+	for (const a of assessed.overridden) out.push(`Assumption replaced: ${a.title}: ${a.used} ${a.unit} (shipped: ${a.value ?? "off"})`.trim());
 	for (const c of assessed.cases) {
 		out.push(bold(`${c.id}  ${c.kind}, ${c.crew}, ${c.phase}`));
 		if (c.motion === null) out.push("  not built");

@@ -88,7 +88,7 @@ export class DropPicture {
 	/** The camera of External as first shown: beside the person, prograde to the right. */
 	defaultLook(): Look {
 		const { deck } = this.stage.drop;
-		const { stance } = this.stage;
+		const { stance } = this.stage.drop;
 		const near = deck.axialTo - stance.axial >= 1.9 || deck.axialTo - stance.axial >= stance.axial - deck.axialFrom;
 		const towards = Math.cos(stance.facing) >= -0.2 ? 1 : -1;
 		const lean = ((near ? 1 : -1) * towards * 24 * Math.PI) / 180;

@@ -1,8 +1,7 @@
-import { defaultFeet } from "../body/reach.ts";
 import type { Drop } from "../activity/drop.ts";
 import { apparentParts } from "../frame/apparent.ts";
 import type { Spin } from "../frame/spin.ts";
-import { angleNear, type Deck, floorAlong, floorAngle, type Habitat, heightAbove } from "../layout/habitat.ts";
+import type { Deck, Habitat } from "../layout/habitat.ts";
 import { writeRingFromIcrs } from "../sky/attitude.ts";
 import { type RingVec, ring } from "../vector/vec3.ts";
 import { bayShape } from "./bay.ts";
@@ -14,31 +13,6 @@ import { floorPoint, gapLine, ghostMark, landingMark } from "./landing-mark.ts";
 import { part, placeAt } from "./part.ts";
 import { directionToStage, type StageFrame, stageFrame, toStage } from "./stage-frame.ts";
 import { GHOST_TRAIL, OBJECT_TRAIL, trailOf } from "./trail.ts";
-
-/** Where and how the person stands: feet at a floor place, facing a heading (rad). */
-export interface Stance {
-	readonly angle: number;
-	readonly axial: number;
-	readonly facing: number;
-	/** Whether the layout says so; otherwise the hand decides. */
-	readonly given: boolean;
-}
-
-/** Nearer than this to a bulkhead nobody stands, m. */
-const CLEAR = 0.3;
-
-/** The stance of a drop: as the layout says, else so that the hand is at the release, facing the way it goes. */
-export function stanceOf(drop: Drop, stature: number, releaseHeading: number | null): Stance {
-	if (drop.feet) return { angle: drop.feet.angle, axial: drop.feet.axial, facing: drop.feet.facing, given: true };
-	const { deck, position } = drop;
-	const facing = releaseHeading ?? 0;
-	const offset = defaultFeet(heightAbove(deck, position), stature, facing);
-	const angle = angleNear(Math.atan2(position[1], position[0]), deck.middle);
-	const within = (value: number, from: number, to: number): number => Math.min(Math.max(value, from + CLEAR), to - CLEAR);
-	let along = floorAlong(deck, angle) + offset.prograde;
-	if (!deck.closed) along = within(along, floorAlong(deck, deck.from), floorAlong(deck, deck.to));
-	return { angle: floorAngle(deck, along), axial: within(position[2] + offset.axial, deck.axialFrom, deck.axialTo), facing, given: false };
-}
 
 /** The object's apparent-gravity parts at an instant, stage components, m/s². */
 export interface ObjectForces {
@@ -81,10 +55,9 @@ export class DropStage {
 		private readonly habitat: Habitat,
 		private readonly spin: Spin,
 		readonly drop: Drop,
-		readonly stance: Stance,
 		readonly stars: Stars,
 	) {
-		const { deck } = drop;
+		const { deck, stance } = drop;
 		this.frame = stageFrame(deck, stance.angle, stance.axial);
 		const { frame } = this;
 		this.still = [
@@ -183,7 +156,7 @@ export class DropStage {
 
 	/** The stage triad of a heading at the stance: what "in front of you" means. */
 	get facingDirection(): readonly [number, number, number] {
-		return [Math.cos(this.stance.facing), 0, Math.sin(this.stance.facing)];
+		return [Math.cos(this.drop.stance.facing), 0, Math.sin(this.drop.stance.facing)];
 	}
 }
 
