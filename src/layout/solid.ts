@@ -1,6 +1,6 @@
 import { directionOf, ringFromCylindrical, ringFromLocal, type Triad, triadAt } from "../frame/place.ts";
 import { along, cross, type RingVec, ring } from "../vector/vec3.ts";
-import { deckTriad, type Habitat, type Ladder, placeOnDeck, type Workstation } from "./habitat.ts";
+import { deckTriad, floorAlong, floorAngle, type Habitat, type Ladder, placeOnDeck, type Workstation } from "./habitat.ts";
 
 /**
  * Bodies of the elements, ring frame, m: what flies strikes them where the element is marked solid,
@@ -116,38 +116,44 @@ export interface WorkstationParts {
 export function workstationParts(habitat: Habitat, workstation: Workstation): WorkstationParts {
 	const deck = habitat.decks[workstation.deck];
 	if (!deck) throw new RangeError(`workstation ${workstation.id} stands on deck ${workstation.deck} of ${habitat.decks.length}`);
-	const { angle, axial, facing } = workstation;
-	const s = site(placeOnDeck(deck, angle, axial, 0), deckTriad(deck, angle), facing);
 	const w = WORKSTATION;
-	const near = w.reach;
-	const middle = near + w.topDepth / 2;
+	/** Each thing stands upright at its own floor point, `ahead` of the place. */
+	const standing = (ahead: number): Site => {
+		const { facing } = workstation;
+		const angle = floorAngle(deck, floorAlong(deck, workstation.angle) + ahead * Math.cos(facing));
+		const point = placeOnDeck(deck, angle, workstation.axial + ahead * Math.sin(facing), 0);
+		return site(point, deckTriad(deck, angle), facing);
+	};
+	const desk = standing(w.reach + w.topDepth / 2);
+	const near = -w.topDepth / 2;
 	const thick = 0.04;
 	const under = w.topHeight - thick;
 	const side = w.topWidth / 2 - 0.05;
+	const stool = standing(-w.seatBehind);
 	const seatThick = 0.06;
 	const postRadius = 0.032;
 	const baseThick = 0.014;
 	return {
-		top: box(s, [middle, w.topHeight - thick / 2, 0], [w.topDepth, thick, w.topWidth]),
+		top: box(desk, [0, w.topHeight - thick / 2, 0], [w.topDepth, thick, w.topWidth]),
 		panels: [
-			box(s, [middle + 0.03, under / 2, -side], [w.topDepth - 0.14, under, 0.03]),
-			box(s, [middle + 0.03, under / 2, side], [w.topDepth - 0.14, under, 0.03]),
-			box(s, [near + w.topDepth - 0.1, under - 0.21, 0], [0.024, 0.42, 2 * side - 0.03]),
+			box(desk, [0.03, under / 2, -side], [w.topDepth - 0.14, under, 0.03]),
+			box(desk, [0.03, under / 2, side], [w.topDepth - 0.14, under, 0.03]),
+			box(desk, [near + w.topDepth - 0.1, under - 0.21, 0], [0.024, 0.42, 2 * side - 0.03]),
 		],
-		keys: box(s, [near + 0.17, w.topHeight + 0.012, 0], [0.16, 0.024, 0.46]),
-		screen: box(s, [near + 0.47, w.topHeight + 0.31, 0], [0.03, 0.38, 0.66], 0.12),
+		keys: box(desk, [near + 0.17, w.topHeight + 0.012, 0], [0.16, 0.024, 0.46]),
+		screen: box(desk, [near + 0.47, w.topHeight + 0.31, 0], [0.03, 0.38, 0.66], 0.12),
 		stand: [
-			box(s, [near + 0.5, w.topHeight + 0.1, 0], [0.03, 0.2, 0.07]),
-			box(s, [near + 0.5, w.topHeight + 0.006, 0], [0.18, 0.012, 0.26]),
+			box(desk, [near + 0.5, w.topHeight + 0.1, 0], [0.03, 0.2, 0.07]),
+			box(desk, [near + 0.5, w.topHeight + 0.006, 0], [0.18, 0.012, 0.26]),
 		],
-		seat: box(s, [-w.seatBehind, w.seatHeight - seatThick / 2, 0], [0.36, seatThick, 0.38]),
+		seat: box(stool, [0, w.seatHeight - seatThick / 2, 0], [0.36, seatThick, 0.38]),
 		post: {
 			kind: "capsule",
-			a: at(s, -w.seatBehind, postRadius, 0),
-			b: at(s, -w.seatBehind, w.seatHeight - seatThick, 0),
+			a: at(stool, 0, postRadius, 0),
+			b: at(stool, 0, w.seatHeight - seatThick, 0),
 			radius: postRadius,
 		},
-		base: box(s, [-w.seatBehind, baseThick / 2, 0], [0.3, baseThick, 0.3]),
+		base: box(stool, [0, baseThick / 2, 0], [0.3, baseThick, 0.3]),
 	};
 }
 

@@ -42,7 +42,16 @@ function farEnd(habitat: Habitat, built: ReadonlyMap<Deck, Extent>, frame: Stage
 export function bayShape(habitat: Habitat, deckIndex: number, frame: StageFrame): Drawable[] {
 	const built = extents(habitat, frame);
 	const extent = built.get(habitat.decks[deckIndex] as Deck);
-	if (!extent) return [];
+	return extent ? shapeOf(habitat, built, extent, frame) : [];
+}
+
+/** The bays of every deck that can be seen from a station: its own and those that hatches lead to. */
+export function bayShapes(habitat: Habitat, frame: StageFrame): Drawable[] {
+	const built = extents(habitat, frame);
+	return [...built.values()].flatMap((extent) => shapeOf(habitat, built, extent, frame));
+}
+
+function shapeOf(habitat: Habitat, built: ReadonlyMap<Deck, Extent>, extent: Extent, frame: StageFrame): Drawable[] {
 	const name = (part: string): string => `bay:${extent.deck.id}:${part}`;
 	const shafts = new MeshBuilder();
 	const shaftEdges = new LineBuilder();
