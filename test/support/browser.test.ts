@@ -21,7 +21,7 @@ beforeAll(async () => {
 	folder = mkdtempSync(join(tmpdir(), "offplumb-page-"));
 	writeFileSync(
 		join(folder, "index.html"),
-		`<!doctype html><link rel="icon" href="data:,"><title>a</title><link rel="stylesheet" href="a.css"><output></output><script type="module" src="a.js"></script>`,
+		`<!doctype html><link rel="icon" href="data:,"><title>a</title><link rel="stylesheet" href="a.css"><p>Words</p><output></output><script type="module" src="a.js"></script>`,
 	);
 	writeFileSync(join(folder, "a.js"), script);
 	writeFileSync(join(folder, "a.css"), "body { background: rgb(20, 120, 220) }");

@@ -1,5 +1,5 @@
 import { execFileSync, spawnSync } from "node:child_process";
-import { existsSync, mkdirSync, readFileSync, renameSync, rmSync } from "node:fs";
+import { existsSync, mkdirSync, readFileSync, renameSync, rmSync, writeFileSync } from "node:fs";
 import { delimiter, join } from "node:path";
 import { cache, locked, root, run, say } from "../../.ci/house.mjs";
 
@@ -26,6 +26,16 @@ function onPath(): string | undefined {
 	);
 }
 
+/** A page with text ends a browser that finds no font at all: its own are offered beside those of the system. */
+const fontsConf = (folder: string): string => `<?xml version="1.0"?>
+<!DOCTYPE fontconfig SYSTEM "fonts.dtd">
+<fontconfig>
+	<include ignore_missing="yes">/etc/fonts/fonts.conf</include>
+	<dir>${folder.replaceAll("&", "&amp;").replaceAll("<", "&lt;")}/fonts</dir>
+	<cachedir prefix="xdg">fontconfig</cachedir>
+</fontconfig>
+`;
+
 /** Unpacks the browser that the lockfile pins into a folder named after its version: the package re-uses whatever lies in TMPDIR. */
 async function unpack(): Promise<string> {
 	const { version } = JSON.parse(readFileSync(join(root, "node_modules/@sparticuz/chromium/package.json"), "utf8"));
@@ -42,6 +52,7 @@ async function unpack(): Promise<string> {
 		const script = `const { default: chromium } = await import("@sparticuz/chromium"); await chromium.executablePath();`;
 		const status = await run(process.execPath, ["--input-type=module", "-e", script], { env });
 		if (status !== 0) throw new Error(`unpacking @sparticuz/chromium ended with status ${status}`);
+		writeFileSync(join(staging, "fonts.conf"), fontsConf(folder));
 		renameSync(staging, folder);
 		return folder;
 	});
@@ -61,7 +72,7 @@ export async function findChromium(): Promise<Chromium> {
 		throw new Error(`no Chrome or Chromium found on ${process.platform} ${process.arch}: name one in OFFPLUMB_CHROMIUM`);
 	const folder = await unpack();
 	const executable = join(folder, "chromium");
-	if (!existsSync("/etc/fonts/fonts.conf")) env.FONTCONFIG_PATH = join(folder, "fonts");
+	env.FONTCONFIG_FILE = join(folder, "fonts.conf");
 	if (starts(executable, env)) return { executable, env, origin: "@sparticuz/chromium" };
 	env.LD_LIBRARY_PATH = [join(folder, "al2023/lib"), env.LD_LIBRARY_PATH].filter(Boolean).join(delimiter);
 	if (!starts(executable, env))
