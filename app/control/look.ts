@@ -23,7 +23,7 @@ const tell = (): void => {
 	for (const listener of listeners) listener();
 };
 
-const copy = (from: Look): Look => ({ ...from, pan: new Float64Array(from.pan) });
+const copy = (from: Look): Look => ({ ...from, target: new Float64Array(from.target) });
 
 /** The look of a station; another station starts from its own, the same keeps what was turned. */
 export function lookFor(station: string, fresh: () => Look): Look {
@@ -44,8 +44,8 @@ export function resetLook(view: View): void {
 		look.fovEye = start.fovEye;
 	} else {
 		const { yaw, pitch, fovEye } = look;
-		Object.assign(look, copy(start), { yaw, pitch, fovEye, pan: look.pan });
-		look.pan.set(start.pan);
+		Object.assign(look, copy(start), { yaw, pitch, fovEye, target: look.target });
+		look.target.set(start.target);
 	}
 	tell();
 }
@@ -78,9 +78,9 @@ export function pan(right: number, up: number): void {
 	if (!look) return;
 	const c = Math.cos(look.azimuth);
 	const s = Math.sin(look.azimuth);
-	look.pan[0] = (look.pan[0] as number) - right * c;
-	look.pan[2] = (look.pan[2] as number) + right * s;
-	look.pan[1] = (look.pan[1] as number) - up;
+	look.target[0] = (look.target[0] as number) - right * c;
+	look.target[2] = (look.target[2] as number) + right * s;
+	look.target[1] = (look.target[1] as number) - up;
 	tell();
 }
 

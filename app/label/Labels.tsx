@@ -1,6 +1,8 @@
 import { useLayoutEffect, useMemo, useRef } from "react";
 import type { DropPicture } from "../../src/shape/drop-picture.ts";
-import type { AssessedCase } from "../store/core.ts";
+import type { AssessedCase, Finding } from "../store/core.ts";
+import { useDocument } from "../store/document.ts";
+import { weightiest } from "../store/findings.ts";
 import { usePrinter } from "../panel/print.ts";
 import { useSession } from "../store/session.ts";
 import { dropLabels } from "./labels.ts";
@@ -9,7 +11,12 @@ import { type Label, LabelPlacer } from "./place.ts";
 /** The labels over the canvas: DOM, so that they stay sharp, can be read out and pressed. The conductor moves them. */
 export function Labels({ shown, picture, onPlacer }: { readonly shown: AssessedCase; readonly picture: DropPicture; readonly onPlacer: (placer: LabelPlacer | null) => void }) {
 	const print = usePrinter();
-	const texts = useMemo(() => dropLabels(shown, picture, print), [shown, picture, print]);
+	const external = useSession((s) => s.view === "external");
+	const findings = useDocument((s) => s.assessed.findings);
+	const texts = useMemo(
+		() => dropLabels(picture, print, verdictOf(shown, findings), external),
+		[shown, picture, print, findings, external],
+	);
 	const host = useRef<HTMLDivElement>(null);
 	useLayoutEffect(() => {
 		const children = [...(host.current?.children ?? [])] as HTMLElement[];
@@ -19,7 +26,7 @@ export function Labels({ shown, picture, onPlacer }: { readonly shown: AssessedC
 				anchor: text.anchor,
 				element,
 				rank: i,
-				centred: text.centred === true,
+				hang: text.hang ?? "free",
 				tries: text.tries,
 				width: element.offsetWidth,
 				height: element.offsetHeight,
@@ -40,6 +47,7 @@ export function Labels({ shown, picture, onPlacer }: { readonly shown: AssessedC
 						onClick={() => useSession.setState({ derivation: text.opens ?? null })}
 					>
 						{text.text}
+						{text.verdict && <em>{text.verdict}</em>}
 					</button>
 				) : (
 					<span key={text.anchor} className={`label ${text.look} ${text.letter ? `force-${text.letter}` : ""}`} aria-hidden="true">
@@ -50,6 +58,19 @@ export function Labels({ shown, picture, onPlacer }: { readonly shown: AssessedC
 		</div>
 	);
 }
+
+/** What the weightiest finding outside its limit says of the landing, or null. */
+function verdictOf(c: AssessedCase, findings: readonly Finding[]): string | null {
+	const own = findings.filter((f) => f.subject === c.id && f.crew === c.crew && f.phase === c.phase && f.basis !== "unverified");
+	const worst = weightiest(own);
+	if (!worst) return null;
+	return worst.result === "outside" ? (OUTSIDE[worst.quantity] ?? "outside its limit") : "within its limits";
+}
+const OUTSIDE: Readonly<Record<string, string>> = {
+	walkway_landings: "outside: on the walkway",
+	hatches_passed: "outside: through a hatch",
+	coamings_struck: "outside: strikes a coaming",
+};
 
 function ScaleBar({ picture, metres, print }: { readonly picture: DropPicture; readonly metres: number; readonly print: (value: number, unit: string) => string }) {
 	const greatest = picture.stage.greatest.centrifugal;

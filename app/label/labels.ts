@@ -1,5 +1,4 @@
 import type { AnchorName, DropPicture } from "../../src/shape/drop-picture.ts";
-import type { AssessedCase } from "../store/core.ts";
 
 export interface LabelText {
 	readonly anchor: AnchorName;
@@ -9,7 +8,9 @@ export interface LabelText {
 	readonly letter?: "C" | "K" | "E";
 	/** Summary key whose derivation it opens. */
 	readonly opens?: string;
-	readonly centred?: boolean;
+	readonly hang?: "centred" | "outward";
+	/** A second line in words: what the finding says of it. */
+	readonly verdict?: string;
 	readonly tries: readonly (readonly [number, number])[];
 	/** A scale bar after the text: a length in m/s². */
 	readonly bar?: number;
@@ -51,22 +52,22 @@ export function gapWords(gap: NonNullable<DropPicture["stage"]["gap"]>, print: P
 }
 
 /** Every label of a drop's picture, the most important first. */
-export function dropLabels(c: AssessedCase, picture: DropPicture, print: Print): readonly LabelText[] {
+export function dropLabels(picture: DropPicture, print: Print, verdict: string | null, external: boolean): readonly LabelText[] {
 	const { gap } = picture.stage;
 	const ten = picture.minorFactor === 10 ? " ×10" : "";
 	const force = (letter: "C" | "K" | "E", text: string): LabelText => ({ anchor: letter, letter, text, look: "chip", tries: ROUND });
 	return [
-		...(gap ? [{ anchor: "gap", text: gapWords(gap, print), look: "answer", opens: "landing_prograde_m", tries: BESIDE_GAP } as const] : []),
-		force("K", `K${ten}`),
-		force("C", "C"),
-		force("E", `E${ten}`),
+		...(gap ? [{ anchor: "gap", text: gapWords(gap, print), look: "answer", opens: "landing_prograde_m", tries: BESIDE_GAP, ...(verdict ? { verdict } : {}) } as const] : []),
+		force("K", `K${external ? " Coriolis" : ""}${ten}`),
+		force("C", external ? "C centrifugal" : "C"),
+		force("E", `E${external ? " Euler" : ""}${ten}`),
 		{ anchor: "ghost", text: "without turning", look: "note", tries: ROUND },
-		{ anchor: "up", text: "up", look: "axis", centred: true, tries: [] },
-		{ anchor: "prograde", text: "with spin", look: "axis", centred: true, tries: [] },
-		{ anchor: "axial", text: "axial", look: "axis", centred: true, tries: [] },
-		{ anchor: "rose", text: c.motion && c.motion.flight.end > 0 ? "on the object, in flight" : "on the object", look: "instrument", centred: true, tries: [] },
-		{ anchor: "rose-bar", text: "", look: "instrument", centred: true, tries: [], bar: 1 },
-		{ anchor: "plumb", text: plumbWords(picture, print), look: "instrument", centred: true, tries: [] },
+		{ anchor: "up", text: "up", look: "axis", hang: "outward", tries: [] },
+		{ anchor: "prograde", text: "with spin", look: "axis", hang: "outward", tries: [] },
+		{ anchor: "axial", text: "axial", look: "axis", hang: "outward", tries: [] },
+		{ anchor: "rose", text: "on the object", look: "instrument", hang: "centred", tries: [] },
+		{ anchor: "rose-bar", text: "", look: "instrument", hang: "centred", tries: [], bar: 1 },
+		{ anchor: "plumb", text: plumbWords(picture, print), look: "instrument", hang: "centred", tries: [] },
 	];
 }
 

@@ -7,8 +7,8 @@ export interface Label {
 	readonly element: HTMLElement;
 	/** Placed first and kept clear of; smaller is sooner. */
 	readonly rank: number;
-	/** Middle of the element on its anchor, never moved. */
-	readonly centred: boolean;
+	/** "centred": its middle on its anchor; "outward": beyond its anchor as seen from the axis cue's origin; "free": beside its anchor, where there is room. */
+	readonly hang: "centred" | "outward" | "free";
 	/** Places tried, best first, as (x, y) in half sizes of the element with a margin. */
 	readonly tries: readonly (readonly [number, number])[];
 	width: number;
@@ -60,22 +60,38 @@ export class LabelPlacer {
 			if (element.style.visibility !== "hidden") element.style.visibility = "hidden";
 			return;
 		}
+		if (label.hang !== "free") {
+			this.hang(label, picture, x, y, width, height);
+			return;
+		}
 		let chosen = -1;
-		if (label.centred) chosen = 0;
-		else {
-			for (let k = -1; k < label.tries.length && chosen < 0; k++) {
-				const i = k < 0 ? label.taken : k;
-				if (i >= 0 && this.fits(label, i, x, y, width, height)) chosen = i;
-			}
+		for (let k = -1; k < label.tries.length && chosen < 0; k++) {
+			const i = k < 0 ? label.taken : k;
+			if (i >= 0 && this.fits(label, i, x, y, width, height)) chosen = i;
 		}
 		if (chosen < 0) {
 			if (element.style.visibility !== "hidden") element.style.visibility = "hidden";
 			return;
 		}
 		label.taken = chosen;
-		const [tx, ty] = label.centred ? [0, 0] : (label.tries[chosen] as readonly [number, number]);
-		const cx = x + tx * (label.width / 2 + MARGIN);
-		const cy = y + ty * (label.height / 2 + MARGIN);
+		const [tx, ty] = label.tries[chosen] as readonly [number, number];
+		this.show(label, x + tx * (label.width / 2 + MARGIN), y + ty * (label.height / 2 + MARGIN));
+	}
+
+	private hang(label: Label, picture: DropPicture, x: number, y: number, width: number, height: number): void {
+		if (label.hang === "centred") {
+			this.show(label, x, y);
+			return;
+		}
+		this.at(picture, picture.anchors.axes.point, width, height);
+		const dx = x - (this.pixel[0] as number);
+		const dy = y - (this.pixel[1] as number);
+		const l = Math.max(1, Math.hypot(dx, dy));
+		this.show(label, x + (dx / l) * (label.width / 2 + 2), y + (dy / l) * (label.height / 2 + 1));
+	}
+
+	private show(label: Label, cx: number, cy: number): void {
+		const { element } = label;
 		this.take(cx - label.width / 2, cy - label.height / 2, cx + label.width / 2, cy + label.height / 2);
 		element.style.transform = `translate(${Math.round(cx - label.width / 2)}px,${Math.round(cy - label.height / 2)}px)`;
 		if (element.style.visibility !== "visible") element.style.visibility = "visible";

@@ -18,8 +18,8 @@ export interface Look {
 	elevation: number;
 	/** m */
 	distance: number;
-	/** Of the target, stage axes, m. */
-	readonly pan: Float64Array;
+	/** What the camera looks at and turns about, stage, m. */
+	readonly target: Float64Array;
 	fovExternal: number;
 }
 
@@ -29,12 +29,12 @@ export interface Anchor {
 	visible: boolean;
 }
 
-export const ANCHORS = ["gap", "landing", "ghost", "object", "C", "K", "E", "prograde", "up", "axial", "rose", "rose-bar", "plumb"] as const;
+export const ANCHORS = ["gap", "landing", "ghost", "object", "C", "K", "E", "prograde", "up", "axial", "rose", "rose-bar", "plumb", "axes"] as const;
 export type AnchorName = (typeof ANCHORS)[number];
 
 /** Of the instruments, CSS px. */
-const AXIS = { width: 140, height: 112, arm: 30, margin: 14 } as const;
-const ROSE = { width: 168, height: 178, arm: 74, margin: 14 } as const;
+const AXIS = { width: 148, height: 106, arm: 30, margin: 14, small: { width: 112, height: 84, arm: 22 } } as const;
+const ROSE = { width: 168, height: 178, arm: 62, margin: 14 } as const;
 const PLUMB = { width: 104, height: 178, long: 84 } as const;
 /** A picture narrower or lower than this has no room for rose and plumb. */
 const ROOM = { width: 560, height: 420 } as const;
@@ -85,22 +85,29 @@ export class DropPicture {
 		];
 	}
 
-	/** The camera of External as first shown: beside the person, prograde to the right. */
+	/** The look of External as first shown: beside the person, prograde to the right, the whole flight in the picture. */
 	defaultLook(): Look {
-		const { deck } = this.stage.drop;
-		const { stance } = this.stage.drop;
+		const { deck, stance } = this.stage.drop;
 		const near = deck.axialTo - stance.axial >= 1.9 || deck.axialTo - stance.axial >= stance.axial - deck.axialFrom;
 		const towards = Math.cos(stance.facing) >= -0.2 ? 1 : -1;
-		const lean = ((near ? 1 : -1) * towards * 24 * Math.PI) / 180;
+		const azimuth = (near ? 0 : Math.PI) + ((near ? 1 : -1) * towards * 24 * Math.PI) / 180;
+		const elevation = (11 * Math.PI) / 180;
+		const { low, high } = this.stage.bounds;
+		const middle = (k: number): number => ((low[k] as number) + (high[k] as number)) / 2;
+		const size = (k: number): number => (high[k] as number) - (low[k] as number);
+		const across = size(0) * Math.abs(Math.cos(azimuth)) + size(2) * Math.abs(Math.sin(azimuth));
+		const fovExternal = (48 * Math.PI) / 180;
+		const fit = Math.max(size(1) * 1.24, (across * 1.35) / 1.15) / 2 / Math.tan(fovExternal / 2);
+		const depth = (size(2) * Math.abs(Math.cos(azimuth)) + size(0) * Math.abs(Math.sin(azimuth))) / 2;
 		return {
 			yaw: 0,
 			pitch: 0,
 			fovEye: (75 * Math.PI) / 180,
-			azimuth: near ? lean : Math.PI + lean,
-			elevation: (11 * Math.PI) / 180,
-			distance: 3.2,
-			pan: new Float64Array(3),
-			fovExternal: (48 * Math.PI) / 180,
+			azimuth,
+			elevation,
+			target: new Float64Array([middle(0), middle(1) - 0.06 * size(1), middle(2)]),
+			distance: Math.min(60, fit + 0.6 * depth),
+			fovExternal,
 		};
 	}
 
@@ -112,7 +119,7 @@ export class DropPicture {
 		if (view === "eyepoint") this.aimEye(look);
 		else this.aimExternal(look);
 		const room = width >= ROOM.width && height >= ROOM.height;
-		this.setForces(t, view, width, height, room);
+		this.setForces(view, width, height, room);
 		this.setInstruments(view, width, height, room);
 		this.setMarks();
 	}
@@ -136,12 +143,8 @@ export class DropPicture {
 	}
 
 	private aimExternal(look: Look): void {
-		const { camera, stage } = this;
-		const [fx, , fz] = stage.facingDirection;
-		const reach = 0.22;
-		const tx = fx * reach + (look.pan[0] as number);
-		const ty = 0.83 + (look.pan[1] as number);
-		const tz = fz * reach + (look.pan[2] as number);
+		const { camera } = this;
+		const [tx, ty, tz] = look.target as unknown as [number, number, number];
 		const c = Math.cos(look.elevation);
 		const dx = c * Math.sin(look.azimuth);
 		const dy = Math.sin(look.elevation);
@@ -154,10 +157,9 @@ export class DropPicture {
 	}
 
 	/** The arrows: on the object in External, on the rose in Eyepoint. */
-	private setForces(t: number, view: View, width: number, height: number, room: boolean): void {
+	private setForces(view: View, width: number, height: number, room: boolean): void {
 		const { stage, camera, origin } = this;
 		const { greatest, object } = stage;
-		const flying = t > 0;
 		let scale: number;
 		let head: number;
 		let perMetre: number;
@@ -177,7 +179,7 @@ export class DropPicture {
 		this.rosePixels = scale * perMetre;
 		const minor = Math.max(greatest.coriolis, greatest.euler) * scale * perMetre;
 		this.minorFactor = minor > 0 && minor < SHORTEST ? 10 : 1;
-		const shown = flying && (view === "external" || room);
+		const shown = view === "external" || room;
 		this.onRose = view === "eyepoint";
 		this.point("C", stage.forces.centrifugal, scale, head, shown);
 		this.point("K", stage.forces.coriolis, scale * this.minorFactor, head, shown);
@@ -205,16 +207,18 @@ export class DropPicture {
 
 	private setInstruments(view: View, width: number, height: number, room: boolean): void {
 		const { camera, anchors, stage } = this;
-		const small = width < ROOM.width ? 0.72 : 1;
-		const axisX = width - AXIS.margin - AXIS.width / 2;
-		const axisY = AXIS.margin + AXIS.height / 2;
-		this.axisPanel.set(camera, width, height, axisX, axisY);
-		this.axes.set(camera, width, height, axisX, axisY + 4, AXIS.arm * small);
+		const cue = width < ROOM.width ? AXIS.small : AXIS;
+		const axisX = width - AXIS.margin - cue.width / 2;
+		const axisY = AXIS.margin + cue.height / 2;
+		this.axisPanel.set(camera, width, height, axisX, axisY, cue.width / AXIS.width, cue.height / AXIS.height);
+		this.axes.set(camera, width, height, axisX, axisY + 4, cue.arm);
+		anchors.axes.visible = true;
+		hudPoint(camera, width, height, axisX, axisY + 4, anchors.axes.point);
 		(["prograde", "up", "axial"] as const).forEach((name, i) => {
 			anchors[name].visible = true;
 			anchors[name].point.set(this.axes.tips[i] as Float64Array);
 		});
-		this.occupy(0, axisX, axisY, AXIS.width, AXIS.height, true);
+		this.occupy(0, axisX, axisY, cue.width, cue.height, true);
 		const rose = room && view === "eyepoint";
 		for (const p of this.rosePanel.parts) p.visible = rose;
 		const roseX = ROSE.margin + ROSE.width / 2;

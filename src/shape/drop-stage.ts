@@ -40,6 +40,8 @@ export class DropStage {
 	readonly ghostLanding: Float64Array | null;
 	/** From where it would have landed to where it lands, along the floor, m, + prograde and + axial; null where one is missing or lies on another deck. */
 	readonly gap: { readonly prograde: number; readonly axial: number; readonly length: number } | null;
+	/** Box about the person, the flight and where it would land without turning, stage, m. */
+	readonly bounds: { readonly low: Float64Array; readonly high: Float64Array };
 	/** Unit direction of apparent gravity on the standing person; none at no weight. */
 	readonly plumb = new Float64Array(3);
 	private readonly state = new Float64Array(6);
@@ -78,7 +80,16 @@ export class DropStage {
 		this.landing = drop.landing ? this.stagePoint(drop.landing.point) : null;
 		this.ghostLanding = drop.ghost.point ? this.stagePoint(drop.ghost.point) : null;
 		this.parts = [...this.ghostLanded, ...this.gapParts, ...this.landed, ...(ghost ? ghost.parts : []), ...trail.parts, ...this.objectParts];
+		this.bounds = { low: new Float64Array([-0.3, -0.05, -0.3]), high: new Float64Array([0.3, 1.85, 0.3]) };
 		this.measure();
+	}
+
+	private include(p: Float64Array): void {
+		const { low, high } = this.bounds;
+		for (let k = 0; k < 3; k++) {
+			low[k] = Math.min(low[k] as number, p[k] as number);
+			high[k] = Math.max(high[k] as number, p[k] as number);
+		}
 	}
 
 	private stagePoint(p: RingVec): Float64Array {
@@ -103,16 +114,18 @@ export class DropStage {
 		};
 	}
 
-	/** Finds the largest forces, so that arrow scales stand still. */
+	/** Finds the largest forces, so that arrow scales stand still, and the room the flight takes. */
 	private measure(): void {
 		const n = 200;
 		const size = (v: Float64Array): number => Math.hypot(v[0] as number, v[1] as number, v[2] as number);
 		for (let i = 0; i <= n; i++) {
 			this.update((this.drop.flight.end * i) / n);
+			this.include(this.object);
 			this.greatest.centrifugal = Math.max(this.greatest.centrifugal, size(this.forces.centrifugal));
 			this.greatest.coriolis = Math.max(this.greatest.coriolis, size(this.forces.coriolis));
 			this.greatest.euler = Math.max(this.greatest.euler, size(this.forces.euler));
 		}
+		if (this.ghostLanding) this.include(this.ghostLanding);
 	}
 
 	/** Moves everything to time t, s. */

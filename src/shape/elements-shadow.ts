@@ -4,10 +4,10 @@ import { MeshBuilder } from "./mesh.ts";
 import { COLOUR } from "./palette.ts";
 import { directionToStage, type StageFrame, toStage } from "./stage-frame.ts";
 
-/** Discs that lie over each other, so that the middle is darkest: each this opaque, so much over the deck, m. */
-const DISCS = 9;
+/** Discs that lie over each other, so that the middle is darkest and the rim fades: each this opaque, so much over the deck, m. */
+const DISCS = 14;
 const SECTORS = 32;
-const OPACITY = 0.035;
+const OPACITY = 0.021;
 const LIFT = 0.0015;
 
 /**
@@ -35,8 +35,8 @@ export function contactShadow(
 		directionToStage(frame, deckTriad(deck, at).up, n);
 		return mesh.vertex(p[0] as number, p[1] as number, p[2] as number, n[0] as number, n[1] as number, n[2] as number, COLOUR.shadow);
 	};
-	for (let d = 1; d <= DISCS; d++) {
-		const share = d / DISCS;
+	for (let d = 0; d < DISCS; d++) {
+		const share = Math.acos((2 * d + 1) / DISCS - 1) / Math.acos(1 / DISCS - 1);
 		const middle = vertex(0, 0);
 		const edge = Array.from({ length: SECTORS }, (_, i) => {
 			const t = (2 * Math.PI * i) / SECTORS;

@@ -74,8 +74,8 @@ function placeDrawn(camera: Camera, matrix: Float32Array, at: Float64Array, dx: 
 
 export interface HudPanel {
 	readonly parts: readonly Part[];
-	/** Puts its middle at (px, py). */
-	set(camera: Camera, width: number, height: number, px: number, py: number): void;
+	/** Puts its middle at (px, py), stretched. */
+	set(camera: Camera, width: number, height: number, px: number, py: number, stretchX?: number, stretchY?: number): void;
 }
 
 /** A rounded sheet of paper `w` × `h` px with a hairline edge. */
@@ -87,8 +87,12 @@ export function createPanel(w: number, h: number): HudPanel {
 	const rim = part({ ...edge.build("panel edge", 1), depth: "over" });
 	return {
 		parts: [sheet, rim],
-		set(camera, width, height, px, py) {
+		set(camera, width, height, px, py, stretchX = 1, stretchY = 1) {
 			face(camera, width, height, px, py, sheet.matrix);
+			for (let k = 0; k < 3; k++) {
+				sheet.matrix[k] = (sheet.matrix[k] as number) * stretchX;
+				sheet.matrix[4 + k] = (sheet.matrix[4 + k] as number) * stretchY;
+			}
 			rim.matrix.set(sheet.matrix);
 		},
 	};
@@ -159,9 +163,9 @@ export function createAxisCue(): AxisCue {
 				const [dx, dy, dz] = (AXES[i] as (typeof AXES)[number]).d;
 				placeDrawn(camera, (lines[i] as Part).matrix, origin, dx, dy, dz, long);
 				const tip = tips[i] as Float64Array;
-				tip[0] = x + (drawn[0] as number) * long * 1.28;
-				tip[1] = y + (drawn[1] as number) * long * 1.28;
-				tip[2] = z + (drawn[2] as number) * long * 1.28;
+				tip[0] = x + (drawn[0] as number) * long * 1.12;
+				tip[1] = y + (drawn[1] as number) * long * 1.12;
+				tip[2] = z + (drawn[2] as number) * long * 1.12;
 			}
 		},
 	};
