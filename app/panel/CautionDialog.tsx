@@ -19,6 +19,7 @@ export default function CautionDialog() {
 				<button
 					type="button"
 					className="primary"
+					data-first
 					onClick={() => {
 						useSession.setState({ cautionAccepted: true, dialog: null });
 						play();

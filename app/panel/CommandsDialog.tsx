@@ -27,6 +27,7 @@ export default function CommandsDialog() {
 		<Dialog title="Commands and keys" wide>
 			<input
 				type="search"
+				data-first
 				className="filter"
 				aria-label="Filter commands"
 				placeholder="Filter, Enter runs the first"
@@ -105,10 +106,10 @@ function Keys({ command, keymap }: { readonly command: Command; readonly keymap:
 					value={single === "" ? "none" : printStroke(single)}
 					onKeyDown={(e) => {
 						const stroke = strokeOf(e.nativeEvent);
-						if (e.key === "Tab" || e.key === "Escape" || e.key === "Shift" || !isSingle(stroke)) return;
+						const unset = e.key === "Delete" || e.key === "Backspace";
+						if (!isSingle(stroke) || !(unset || e.key.length === 1)) return;
 						e.preventDefault();
-						if (e.key === "Delete" || e.key === "Backspace") set("");
-						else if (e.key.length === 1) set(stroke);
+						set(unset ? "" : stroke);
 					}}
 				/>
 			)}

@@ -9,7 +9,9 @@ export function DerivationPanel({ id, derivation }: { readonly id: string; reado
 			<p className="title">{formula.title}</p>
 			<p className="expression">
 				{formula.expression.split(/;\s*/).map((line) => (
-					<span key={line}>{line}</span>
+					<span key={line}>
+						<Symbols text={line} />
+					</span>
 				))}
 			</p>
 			<table>
@@ -17,7 +19,9 @@ export function DerivationPanel({ id, derivation }: { readonly id: string; reado
 				<tbody>
 					{derivation.inputs.map((i) => (
 						<tr key={i.symbol}>
-							<th scope="row">{i.symbol}</th>
+							<th scope="row">
+								<Symbols text={i.symbol} />
+							</th>
 							<td>{i.name}</td>
 							<td className="value">{typeof i.value === "number" ? withUnit(printNumber(i.value, 4), i.unit) : i.value}</td>
 						</tr>
@@ -37,4 +41,12 @@ export function DerivationPanel({ id, derivation }: { readonly id: string; reado
 			</p>
 		</div>
 	);
+}
+
+/** Plain-text mathematics with what follows an underscore set low: "R_c" as R with a low c. */
+function Symbols({ text }: { readonly text: string }) {
+	return text.split(/_(\p{L}+)/u).map((part, i) => {
+		const key = `${i} ${part}`;
+		return i % 2 === 1 ? <sub key={key}>{part}</sub> : <span key={key}>{part}</span>;
+	});
 }

@@ -2,7 +2,7 @@ import { type ReactNode, useEffect, useId, useRef } from "react";
 import { openDialog } from "../store/session.ts";
 import { Icon } from "./Icon.tsx";
 
-/** A modal dialog over the page; Esc, its cross and a press outside close it, and the focus goes back where it was. */
+/** A modal dialog over the page; Esc, its cross and a press outside close it, and the focus goes back where it was. It begins at `data-first`. */
 export function Dialog({
 	title,
 	children,
@@ -19,6 +19,7 @@ export function Dialog({
 		const dialog = ref.current;
 		before.current ??= document.activeElement;
 		if (dialog && !dialog.open) dialog.showModal();
+		dialog?.querySelector<HTMLElement>("[data-first]")?.focus();
 		return () => {
 			if (before.current instanceof HTMLElement) before.current.focus();
 		};

@@ -1,18 +1,19 @@
 import { marginBar } from "../../src/drawing/margin.ts";
 import { printNumber } from "../../src/quantity/print-quantity.ts";
-import type { Finding } from "../store/core.ts";
+import type { Finding, LayoutFile } from "../store/core.ts";
 import { useDocument } from "../store/document.ts";
 import { type FindingGroup, findingKey, grouped } from "../store/findings.ts";
 import { selectFinding } from "../store/navigate.ts";
 import { useSession } from "../store/session.ts";
 import { type Printer, usePrinter } from "./print.ts";
-import { limitWords, nameOf, quantityWords, RESULT_WORDS } from "./words.ts";
+import { limitWords, quantityWords, RESULT_WORDS, sourceWords, subjectWords } from "./words.ts";
 
 const FORCE_WORDS: Readonly<Record<Finding["force"], string>> = { shall: "Shall", should: "Should", information: "Information" };
 
 /** Every criterion against every subject and case, by force; what is outside comes first. */
 export function Findings() {
 	const findings = useDocument((s) => s.assessed.findings);
+	const layout = useDocument((s) => s.layout);
 	const chosen = useSession((s) => s.finding);
 	const print = usePrinter();
 	return (
@@ -29,7 +30,7 @@ export function Findings() {
 					</summary>
 					<ul>
 						{group.findings.map((f) => (
-							<Row key={findingKey(f)} f={f} chosen={findingKey(f) === chosen} print={print} />
+							<Row key={findingKey(f)} f={f} layout={layout} chosen={findingKey(f) === chosen} print={print} />
 						))}
 					</ul>
 				</details>
@@ -44,13 +45,23 @@ function tallyWords({ tally }: FindingGroup): string {
 	return `${parts.join(", ")}${tally.unverified > 0 ? `; ${tally.unverified} unverified, not counted` : ""}`;
 }
 
-function Row({ f, chosen, print }: { readonly f: Finding; readonly chosen: boolean; readonly print: Printer }) {
+interface RowProps {
+	readonly f: Finding;
+	readonly layout: LayoutFile;
+	readonly chosen: boolean;
+	readonly print: Printer;
+}
+
+function Row({ f, layout, chosen, print }: RowProps) {
 	return (
 		<li className={`finding ${f.result}`}>
 			<button type="button" aria-pressed={chosen} onClick={() => selectFinding(f)}>
 				<span className="title">{f.title}</span>
 				<span className="word">{RESULT_WORDS[f.result]}</span>
-				<span className="who">{[nameOf(f.subject), f.crew, f.phase].filter((s) => s !== null && s !== "").join(", ")}</span>
+				<span className="who">
+					<span>{subjectWords(f, layout)}</span>
+					<span>{sourceWords(f)}</span>
+				</span>
 				{f.value !== null && f.margin !== null && <Bar f={f} value={f.value} print={print} />}
 				<span className="held">
 					{f.value === null ? (

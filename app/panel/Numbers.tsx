@@ -6,15 +6,17 @@ import { DerivationPanel } from "./DerivationPanel.tsx";
 import type { Printer } from "./print.ts";
 import { nameOf, struckWords } from "./words.ts";
 
-/** What each summary key is called on screen, in the order shown. */
-const NAMES: Readonly<Record<string, string>> = {
-	struck: "Strikes",
+/** What summary keys are called on screen, in the order shown: those always in sight, and those on request. */
+const FIRST: Readonly<Record<string, string>> = {
 	flight_time_s: "Time to the impact",
 	landing_speed_mps: "Speed at the impact",
 	landing_angle_deg: "Arrives off vertical",
 	equal_earth_drop_m: "Equal drop on Earth",
 	impact_energy_J: "Energy at the impact",
-	landing_prograde_m: "With spin (−: against)",
+};
+const REST: Readonly<Record<string, string>> = {
+	struck: "Strikes",
+	landing_prograde_m: "Along the deck, − against spin",
 	landing_axial_m: "Along the axis",
 	landing_radius_m: "Radius of the landing",
 	landing_from_feet_prograde_m: "From the feet, with spin",
@@ -27,13 +29,29 @@ export function Numbers({ c, headline, print }: { readonly c: AssessedCase; read
 	const open = useSession((s) => s.derivation);
 	const units = SUMMARY_KEYS[c.kind];
 	const keys = Object.keys(units).filter((key) => key !== headline);
-	const named = Object.keys(NAMES).filter((key) => keys.includes(key));
+	const first = Object.keys(FIRST).filter((key) => keys.includes(key));
+	const rest = keys.filter((key) => !(key in FIRST));
+	const row = (key: string) => (
+		<Row
+			key={key}
+			name={FIRST[key] ?? REST[key] ?? nameOf(key)}
+			summaryKey={key}
+			c={c}
+			unit={units[key] ?? ""}
+			open={open === key}
+			print={print}
+		/>
+	);
 	return (
-		<ul className="numbers" aria-label="Numbers of this case">
-			{[...named, ...keys.filter((key) => !(key in NAMES))].map((key) => (
-				<Row key={key} name={NAMES[key] ?? nameOf(key)} summaryKey={key} c={c} unit={units[key] ?? ""} open={open === key} print={print} />
-			))}
-		</ul>
+		<div className="numbers">
+			<ul aria-label="Numbers of this case">{first.map(row)}</ul>
+			{rest.length > 0 && (
+				<details open={open !== null && rest.includes(open) ? true : undefined}>
+					<summary>More numbers</summary>
+					<ul aria-label="More numbers of this case">{rest.map(row)}</ul>
+				</details>
+			)}
+		</div>
 	);
 }
 

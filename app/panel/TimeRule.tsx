@@ -2,7 +2,7 @@ import { type KeyboardEvent, useEffect, useRef } from "react";
 import { ruler } from "../../src/drawing/trace.ts";
 import { printNumber } from "../../src/quantity/print-quantity.ts";
 import { commandNamed } from "../command/all.ts";
-import { durationOf, eventsOf, type MotionEvent } from "../store/motion.ts";
+import { durationOf, eventsOf } from "../store/motion.ts";
 import { mayPlay, pause, stepTime, useSelectedCase } from "../store/navigate.ts";
 import { SPEEDS, useSession } from "../store/session.ts";
 import { onTime, setTime, transient } from "../store/transient.ts";
@@ -115,7 +115,7 @@ function Scale({
 }: {
 	readonly duration: number;
 	readonly width: number;
-	readonly events: readonly MotionEvent[];
+	readonly events: ReturnType<typeof eventsOf>;
 }) {
 	const { major, minor } = ruler(duration, width, 72);
 	const last = major.at(-1);

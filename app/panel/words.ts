@@ -1,5 +1,5 @@
 import { apparentParts } from "../../src/frame/apparent.ts";
-import { angleNear, deckTriad, floorAlong, placeOnDeck } from "../../src/layout/habitat.ts";
+import { angleNear, deckTriad, floorAlong } from "../../src/layout/habitat.ts";
 import { degFromRad, gFromMps2, rpmFromRadps } from "../../src/quantity/convert.ts";
 import { dot, length, ring } from "../../src/vector/vec3.ts";
 import type { AssessedCase, Finding, LayoutFile } from "../store/core.ts";
@@ -108,7 +108,7 @@ const NEGLIGIBLE = 0.005;
 
 /** Where it lands as the person sees it: "0.11 m in front of your feet and 0.25 m to the right". */
 export function fromFeetWords(c: AssessedCase, print: Printer): string {
-	const feet = c.motion?.feet;
+	const feet = c.motion?.stance.given ? c.motion.stance : null;
 	const prograde = number(c, "landing_from_feet_prograde_m");
 	const axial = number(c, "landing_from_feet_axial_m");
 	if (!feet || prograde === null || axial === null) return "";
@@ -162,6 +162,15 @@ export const RESULT_WORDS: Readonly<Record<Finding["result"], string>> = {
 	"not-assessed": "not assessed",
 };
 
+/** What a finding is about: a deck by its name, anything else by its id, with who and when. */
+export function subjectWords(f: Finding, layout: LayoutFile): string {
+	const deck = layout.habitat.decks.find((d) => d.id === f.subject);
+	return [deck?.name ?? nameOf(f.subject), f.crew, f.phase].filter((s) => s !== null && s !== "").join(", ");
+}
+
+/** The first words of a source, up to where it was printed: "Stone 1973". */
+export const sourceWords = (f: Finding): string => (/\d{4}/.test(f.source) ? (f.source.split(",")[0] ?? "") : "");
+
 /** A finding as one sentence. */
 export function findingWords(f: Finding, print: Printer): string {
 	const head = `${nameOf(RESULT_WORDS[f.result])} (${f.force}${f.basis === "unverified" ? ", unverified, confirm" : ""}): ${f.title}`;
@@ -169,17 +178,15 @@ export function findingWords(f: Finding, print: Printer): string {
 	return `${head}: ${quantityWords(f)} ${print(f.value, f.unit)}, ${limitWords(f, print)}${f.reason ? `; ${f.reason}` : ""}.`;
 }
 
-/** Level (g) and tilt from the deck's own down (rad) of someone standing still at the case's start; null where there is no person on a deck. */
+/** Level (g) and tilt from the deck's own down (rad) of someone standing still at the case's start; null where the kind is not built. */
 export function standing(c: AssessedCase): { readonly level: number; readonly tilt: number } | null {
 	if (!c.motion) return null;
-	const { deck, feet, position } = c.motion;
-	const angle = Math.atan2(position[1], position[0]);
-	const at = feet?.position ?? placeOnDeck(deck, angle, position[2], 0);
+	const { deck, stance } = c.motion;
 	const still = ring(0, 0, 0);
-	const g = apparentParts(c.context.spin, 0, at, still, still).sum;
+	const g = apparentParts(c.context.spin, 0, stance.position, still, still).sum;
 	const size = length(g);
 	if (!(size > 0)) return { level: 0, tilt: 0 };
-	const down = -dot(g, deckTriad(deck, feet?.angle ?? angle).up) / size;
+	const down = -dot(g, deckTriad(deck, stance.angle).up) / size;
 	return { level: gFromMps2(size), tilt: Math.acos(Math.min(1, Math.max(-1, down))) };
 }
 
@@ -192,13 +199,15 @@ export function inWords(c: AssessedCase, layout: LayoutFile, print: Printer): st
 	const who = member ? `Crew member ${member.id}, ${print(member.stature_m, "m")} tall,` : "A crew member";
 	const facing = file.feet ? `, facing ${headingWords(file.feet.facing_deg)}` : "";
 	const tilt = degFromRad(here.tilt);
+	const vertical = tilt < 0.05 ? "straight down to the deck" : `tilted ${print(tilt, "deg")} from the deck’s own down`;
+	const felt = here.level > 0 ? `Apparent gravity at the feet is ${print(here.level, "g")}, ${vertical}.` : "There is no apparent gravity.";
 	return [
-		`${who} stands on the ${c.motion.deck.name}${facing}. The spin rate is ${print(rpmFromRadps(c.context.spin.rate(0)), "rpm")} (phase ${c.phase}). Apparent gravity at the feet is ${print(here.level, "g")}, ${tilt < 0.05 ? "straight down to the deck" : `tilted ${print(tilt, "deg")} from the deck’s own down`}.`,
-		`The object, ${print(file.object.mass_kg, "kg")}, goes as a ${detailOf(c, print)}. ${file.drag ? "Air drag is counted." : "Air drag is left out."} ${eventsOf(
+		`${who} stands on the ${c.motion.deck.name}${facing}. The spin rate is ${print(rpmFromRadps(c.context.spin.rate(0)), "rpm")} (phase ${c.phase}). ${felt}`,
+		`${nameOf(detailOf(c, print))}, an object of ${print(file.object.mass_kg, "kg")}, ${file.drag ? "with" : "without"} air drag. ${eventsOf(
 			c,
 		)
 			.slice(1)
-			.map((e) => `It ${e.name} after ${print(e.t, "s")}.`)
+			.map((e) => `After ${print(e.t, "s")} it ${e.name}.`)
 			.join(" ")}`,
 		headlineWords(c, print),
 		`${consequence(c, print)} First impact only: bounce and roll are not modelled.`.trim(),

@@ -47,6 +47,7 @@ export const fileNameFor = (title: string): string =>
 	`${
 		title
 			.normalize("NFKD")
+			.replace(/\p{M}/gu, "")
 			.toLowerCase()
 			.replace(/[^a-z0-9]+/g, "-")
 			.replace(/^-+|-+$/g, "")

@@ -1,3 +1,4 @@
+import { written } from "../../src/quantity/round.ts";
 import { roundStep } from "../../src/quantity/round-step.ts";
 import type { AssessedCase, Finding } from "./core.ts";
 import { useDocument } from "./document.ts";
@@ -24,6 +25,12 @@ export function useSelectedCase(): AssessedCase | null {
 /** The end of the story on a case's clock: its last event, or its end. s */
 export const lastMoment = (c: AssessedCase): number => eventsOf(c).at(-1)?.t ?? 0;
 
+/** The instant of a finding on its case's clock, s: its last event exactly where the written number means that. */
+function momentOf(f: Finding, c: AssessedCase): number {
+	const last = lastMoment(c);
+	return f.at.t_s === undefined || f.at.t_s === written(last) ? last : f.at.t_s;
+}
+
 /** Puts a case on the stage, stopped at `time`. Cases without a motion are not shown. */
 export function selectCase(c: AssessedCase, time: number): void {
 	if (!c.motion) return;
@@ -42,7 +49,7 @@ export const caseOfFinding = (cases: readonly AssessedCase[], f: Finding): Asses
 /** Chooses a finding: goes to its case and its moment where it has them, and marks it. */
 export function selectFinding(f: Finding): void {
 	const c = caseOfFinding(built(), f);
-	if (c) selectCase(c, f.at.t_s ?? lastMoment(c));
+	if (c) selectCase(c, momentOf(f, c));
 	useSession.setState({ finding: findingKey(f), why: null });
 }
 
@@ -80,16 +87,16 @@ export function openStory(): void {
 		setMotion(0, 0);
 		return;
 	}
-	selectCase(c, worst?.at.t_s ?? lastMoment(c));
+	selectCase(c, worst ? momentOf(worst, c) : lastMoment(c));
 	useSession.setState({ finding: worst && findingKey(worst), why: whyOpened(worst, outside) });
 }
 
 function whyOpened(worst: Finding | null, outside: number): string {
-	if (!worst) return "Opened here because no criterion could be assessed and this activity comes first.";
-	if (worst.result !== "outside") return "Opened here because nothing is outside and this comes nearest to its limit.";
-	if (worst.basis === "unverified") return "Opened here because it is outside, though of a limit that is unverified.";
-	if (outside === 1) return "Opened here because this alone is outside its limit.";
-	return `Opened here because of ${outside} findings outside their limits this one weighs most.`;
+	if (!worst) return "Opened here: no criterion could be assessed, and this activity comes first.";
+	if (worst.result !== "outside") return "Opened here: nothing is outside, and this comes nearest to its limit.";
+	if (worst.basis === "unverified") return "Opened here: it is outside, though of a limit that is unverified.";
+	if (outside === 1) return "Opened here: this alone is outside its limit.";
+	return `Opened here: of ${outside} findings outside their limits this one weighs most.`;
 }
 
 /** Keeps case and moment through an edit; a moment at the last event stays at it. Opens anew where the case is gone. */
@@ -107,7 +114,7 @@ export function followDocument(): () => void {
 			openStory();
 			return;
 		}
-		const atEnd = Math.abs(transient.time - lastMoment(was)) < 1e-9;
+		const atEnd = transient.time === lastMoment(was);
 		setMotion(durationOf(is), atEnd ? lastMoment(is) : transient.time);
 		useSession.setState({ why: null });
 	});
