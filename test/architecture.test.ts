@@ -1,6 +1,6 @@
 import { existsSync, readdirSync, readFileSync } from "node:fs";
 import { describe, expect, test } from "vitest";
-import { coreRule, faultsOf, layerOf, readSource, sourcesBelow } from "./support/layers.ts";
+import { corePackages, coreRule, faultsOf, layerOf, readSource, sourcesBelow } from "./support/layers.ts";
 
 const manifest = JSON.parse(readFileSync("package.json", "utf8"));
 const runtime = Object.keys(manifest.dependencies);
@@ -77,6 +77,14 @@ describe("the house", () => {
 	test("says of every asset where it comes from", () => {
 		const folders = existsSync("assets") ? readdirSync("assets").filter((name) => readdirSync(`assets/${name}`).length > 0) : [];
 		expect(folders.filter((name) => !existsSync(`assets/${name}/SOURCE.md`))).toEqual([]);
+	});
+
+	test("ships what the core imports", () => {
+		expect(
+			Object.values(corePackages)
+				.flat()
+				.filter((name) => !runtime.includes(name)),
+		).toEqual([]);
 	});
 
 	test("pins every dependency to one version", () => {
