@@ -1,7 +1,6 @@
 import { createDropper, type Dropper } from "../body/drop.ts";
-import { type Triad, localFromRing } from "../frame/place.ts";
+import type { Triad } from "../frame/place.ts";
 import { deckTriad } from "../layout/habitat.ts";
-import { ring, sub } from "../vector/vec3.ts";
 import type { Drop } from "./drop.ts";
 
 /** Distance the gaze keeps ahead for each metre the object is below the eyes, cot 68°: straight down would turn the view over. */
@@ -37,7 +36,11 @@ function gazeTrack(drop: Drop, triad: Triad, stature: number): (t: number, out: 
 	const s = Math.sin(facing);
 	return (t, out) => {
 		drop.flight.path.stateAt(Math.min(t, drop.flight.end), state);
-		const [x, y, z] = localFromRing(triad, sub(ring(state[0] as number, state[1] as number, state[2] as number), position));
+		const dx = (state[0] as number) - position[0];
+		const dy = (state[1] as number) - position[1];
+		const x = dx * triad.prograde[0] + dy * triad.prograde[1];
+		const y = dx * triad.up[0] + dy * triad.up[1];
+		const z = (state[2] as number) - position[2];
 		const forward = c * x + s * z;
 		const least = 0.1 + LEAST_AHEAD * Math.max(0, EYE_SHARE * stature - y);
 		out[0] = forward + Math.max(0, least - forward) * Math.min(1, Math.max(0, t / COME_AHEAD));

@@ -14,24 +14,29 @@ export interface ApparentParts {
 	readonly sum: RingVec;
 }
 
-/** Position m, velocity m/s and acceleration m/s² relative to the ring, at time t (s). */
-export function apparentParts(spin: Spin, t: number, position: RingVec, velocity: RingVec, acceleration: RingVec): ApparentParts {
+/**
+ * Writes C, K and E (x and y of each; none has a z) into out[0…5], ring frame, m/s²: position (x, y) m,
+ * velocity (vx, vy) m/s relative to the ring, at time t (s). Allocates nothing.
+ */
+export function writeApparent(spin: Spin, t: number, x: number, y: number, vx: number, vy: number, out: Float64Array): void {
 	const w = spin.rate(t);
 	const wDot = spin.rateDot(t);
-	const centrifugal = ring(w * w * position[0], w * w * position[1], 0);
-	const coriolis = ring(2 * w * velocity[1], -2 * w * velocity[0], 0);
-	const euler = ring(wDot * position[1], -wDot * position[0], 0);
-	const own = scale(acceleration, -1);
-	return { centrifugal, coriolis, euler, own, sum: add(add(centrifugal, coriolis), add(euler, own)) };
+	out[0] = w * w * x;
+	out[1] = w * w * y;
+	out[2] = 2 * w * vy;
+	out[3] = -2 * w * vx;
+	out[4] = wDot * y;
+	out[5] = -wDot * x;
 }
 
-/** Acceleration of a free body relative to the ring: C + K + E (+ what drag adds), m/s². */
-export function freeAcceleration(spin: Spin, t: number, position: RingVec, velocity: RingVec): RingVec {
-	const w = spin.rate(t);
-	const wDot = spin.rateDot(t);
-	return ring(
-		w * w * position[0] + 2 * w * velocity[1] + wDot * position[1],
-		w * w * position[1] - 2 * w * velocity[0] - wDot * position[0],
-		0,
-	);
+/** Position m, velocity m/s and acceleration m/s² relative to the ring, at time t (s). */
+export function apparentParts(spin: Spin, t: number, position: RingVec, velocity: RingVec, acceleration: RingVec): ApparentParts {
+	const p = new Float64Array(6);
+	writeApparent(spin, t, position[0], position[1], velocity[0], velocity[1], p);
+	const [cx, cy, kx, ky, ex, ey] = p as unknown as [number, number, number, number, number, number];
+	const centrifugal = ring(cx, cy, 0);
+	const coriolis = ring(kx, ky, 0);
+	const euler = ring(ex, ey, 0);
+	const own = scale(acceleration, -1);
+	return { centrifugal, coriolis, euler, own, sum: add(add(centrifugal, coriolis), add(euler, own)) };
 }

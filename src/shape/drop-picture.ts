@@ -32,6 +32,7 @@ export interface Anchor {
 export const ANCHORS = ["gap", "landing", "ghost", "object", "C", "K", "E", "prograde", "up", "axial", "rose", "rose-bar", "plumb", "axes"] as const;
 export type AnchorName = (typeof ANCHORS)[number];
 
+const AXIS_NAMES = ["prograde", "up", "axial"] as const;
 /** Of the instruments, CSS px. */
 const AXIS = { width: 148, height: 106, arm: 30, margin: 14, small: { width: 112, height: 84, arm: 22 } } as const;
 const ROSE = { width: 168, height: 178, arm: 62, margin: 14 } as const;
@@ -130,28 +131,28 @@ export class DropPicture {
 		const { position, gaze, up } = figure.eye;
 		for (let k = 0; k < 3; k++) camera.position[k] = position[k] as number;
 		camera.fovY = look.fovEye;
-		const [ux, uy, uz] = up as unknown as [number, number, number];
-		aim(camera, gaze[0] as number, gaze[1] as number, gaze[2] as number, ux, uy, uz);
+		aim(camera, gaze[0] as number, gaze[1] as number, gaze[2] as number, up[0] as number, up[1] as number, up[2] as number);
 		if (look.yaw === 0 && look.pitch === 0) return;
 		const b = camera.basis;
 		const c = Math.cos(look.pitch);
 		const right = c * Math.sin(look.yaw);
 		const above = Math.sin(look.pitch);
 		const ahead = c * Math.cos(look.yaw);
-		const part = (k: number): number => right * (b[k] as number) + above * (b[3 + k] as number) + ahead * (b[6 + k] as number);
-		aim(camera, part(0), part(1), part(2), b[3] as number, b[4] as number, b[5] as number);
+		const d = this.drawn;
+		for (let k = 0; k < 3; k++) d[k] = right * (b[k] as number) + above * (b[3 + k] as number) + ahead * (b[6 + k] as number);
+		aim(camera, d[0] as number, d[1] as number, d[2] as number, b[3] as number, b[4] as number, b[5] as number);
 	}
 
 	private aimExternal(look: Look): void {
 		const { camera } = this;
-		const [tx, ty, tz] = look.target as unknown as [number, number, number];
+		const { target } = look;
 		const c = Math.cos(look.elevation);
 		const dx = c * Math.sin(look.azimuth);
 		const dy = Math.sin(look.elevation);
 		const dz = c * Math.cos(look.azimuth);
-		camera.position[0] = tx + dx * look.distance;
-		camera.position[1] = ty + dy * look.distance;
-		camera.position[2] = tz + dz * look.distance;
+		camera.position[0] = (target[0] as number) + dx * look.distance;
+		camera.position[1] = (target[1] as number) + dy * look.distance;
+		camera.position[2] = (target[2] as number) + dz * look.distance;
 		camera.fovY = look.fovExternal;
 		aim(camera, -dx, -dy, -dz, 0, 1, 0);
 	}
@@ -195,12 +196,12 @@ export class DropPicture {
 			anchor.visible = false;
 			return;
 		}
-		const [x, y, z] = this.origin as unknown as [number, number, number];
+		const o = this.origin;
 		const v = this.drawn;
 		if (this.onRose) hudDirection(this.camera, this.origin, force[0] as number, force[1] as number, force[2] as number, v);
 		else v.set(force);
 		const l = Math.max(1e-9, Math.hypot(v[0] as number, v[1] as number, v[2] as number));
-		arrow.set(x, y, z, (v[0] as number) / l, (v[1] as number) / l, (v[2] as number) / l, l * scale, head);
+		arrow.set(o[0] as number, o[1] as number, o[2] as number, (v[0] as number) / l, (v[1] as number) / l, (v[2] as number) / l, l * scale, head);
 		anchor.visible = arrow.visible;
 		anchor.point.set(arrow.tip);
 	}
@@ -214,10 +215,11 @@ export class DropPicture {
 		this.axes.set(camera, width, height, axisX, axisY + 4, cue.arm);
 		anchors.axes.visible = true;
 		hudPoint(camera, width, height, axisX, axisY + 4, anchors.axes.point);
-		(["prograde", "up", "axial"] as const).forEach((name, i) => {
-			anchors[name].visible = true;
-			anchors[name].point.set(this.axes.tips[i] as Float64Array);
-		});
+		for (let i = 0; i < 3; i++) {
+			const anchor = anchors[AXIS_NAMES[i] as "prograde"];
+			anchor.visible = true;
+			anchor.point.set(this.axes.tips[i] as Float64Array);
+		}
 		this.occupy(0, axisX, axisY, cue.width, cue.height, true);
 		const rose = room && view === "eyepoint";
 		for (const p of this.rosePanel.parts) p.visible = rose;
@@ -237,8 +239,8 @@ export class DropPicture {
 		this.occupy(2, plumbX, plumbY, PLUMB.width, PLUMB.height, room);
 		if (room) this.plumbPanel.set(camera, width, height, plumbX, plumbY);
 		if (room && weight) {
-			const [gx, gy, gz] = stage.plumb as unknown as [number, number, number];
-			this.plumb.set(camera, width, height, plumbX, plumbY - PLUMB.height / 2 + 26, PLUMB.long, gx, gy, gz);
+			const g = stage.plumb;
+			this.plumb.set(camera, width, height, plumbX, plumbY - PLUMB.height / 2 + 26, PLUMB.long, g[0] as number, g[1] as number, g[2] as number);
 		}
 		anchors.plumb.visible = room;
 		hudPoint(camera, width, height, plumbX, plumbY + PLUMB.height / 2 - 26, anchors.plumb.point);
@@ -254,13 +256,11 @@ export class DropPicture {
 
 	private setMarks(): void {
 		const { anchors, stage } = this;
-		const landed = stage.parts.some((p) => p.drawable.name === "landing" && p.visible);
-		const ghost = stage.parts.some((p) => p.drawable.name === "ghost landing" && p.visible);
 		anchors.object.visible = true;
 		anchors.object.point.set(stage.object);
-		anchors.landing.visible = landed && stage.landing !== null;
+		anchors.landing.visible = stage.hasLanded && stage.landing !== null;
 		if (stage.landing) anchors.landing.point.set(stage.landing);
-		anchors.ghost.visible = ghost && stage.ghostLanding !== null;
+		anchors.ghost.visible = stage.ghostHasLanded && stage.ghostLanding !== null;
 		if (stage.ghostLanding) anchors.ghost.point.set(stage.ghostLanding);
 		anchors.gap.visible = anchors.landing.visible && anchors.ghost.visible && stage.gap !== null;
 		if (stage.landing && stage.ghostLanding)

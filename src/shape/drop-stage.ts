@@ -1,9 +1,9 @@
 import type { Drop } from "../activity/drop.ts";
-import { apparentParts } from "../frame/apparent.ts";
+import { writeApparent } from "../frame/apparent.ts";
 import type { Spin } from "../frame/spin.ts";
 import type { Deck, Habitat } from "../layout/habitat.ts";
 import { writeRingFromIcrs } from "../sky/attitude.ts";
-import { type RingVec, ring } from "../vector/vec3.ts";
+import type { RingVec } from "../vector/vec3.ts";
 import { bayShape } from "./bay.ts";
 import type { Drawable, Part, Stars } from "./drawable.ts";
 import { elementShapes } from "./elements.ts";
@@ -11,7 +11,7 @@ import { objectShape } from "./elements-object.ts";
 import { contactShadow } from "./elements-shadow.ts";
 import { floorPoint, gapLine, ghostMark, landingMark } from "./landing-mark.ts";
 import { part, placeAt } from "./part.ts";
-import { directionToStage, type StageFrame, stageFrame, toStage } from "./stage-frame.ts";
+import { putDirection, putOnStage, type StageFrame, stageFrame, toStage } from "./stage-frame.ts";
 import { GHOST_TRAIL, OBJECT_TRAIL, trailOf } from "./trail.ts";
 
 /** The object's apparent-gravity parts at an instant, stage components, m/s². */
@@ -44,6 +44,9 @@ export class DropStage {
 	readonly bounds: { readonly low: Float64Array; readonly high: Float64Array };
 	/** Unit direction of apparent gravity on the standing person; none at no weight. */
 	readonly plumb = new Float64Array(3);
+	hasLanded = false;
+	ghostHasLanded = false;
+	private readonly parts6 = new Float64Array(6);
 	private readonly state = new Float64Array(6);
 	private readonly objectParts: readonly Part[];
 	private readonly showTrail: (t: number) => void;
@@ -133,26 +136,39 @@ export class DropStage {
 		const { drop, spin, frame, state } = this;
 		const shown = Math.min(Math.max(t, 0), drop.flight.end);
 		drop.flight.path.stateAt(shown, state);
-		const position = ring(state[0] as number, state[1] as number, state[2] as number);
-		const velocity = ring(state[3] as number, state[4] as number, state[5] as number);
-		toStage(frame, position, this.object);
+		const x = state[0] as number;
+		const y = state[1] as number;
+		putOnStage(frame, x, y, state[2] as number, this.object);
 		for (const p of this.objectParts) placeAt(p.matrix, this.object[0] as number, this.object[1] as number, this.object[2] as number, 1);
-		const parts = apparentParts(spin, shown, position, velocity, ring(0, 0, 0));
-		directionToStage(frame, parts.centrifugal, this.forces.centrifugal);
-		directionToStage(frame, parts.coriolis, this.forces.coriolis);
-		directionToStage(frame, parts.euler, this.forces.euler);
+		writeApparent(spin, shown, x, y, state[3] as number, state[4] as number, this.parts6);
+		this.force(this.forces.centrifugal, 0);
+		this.force(this.forces.coriolis, 2);
+		this.force(this.forces.euler, 4);
 		this.showTrail(shown);
 		this.showGhost(shown);
-		const landed = shown >= drop.flight.end - 1e-9;
-		const ghostLanded = drop.ghost.end !== null && (shown >= drop.ghost.end || landed);
-		setVisible(this.landed, landed);
-		setVisible(this.ghostLanded, ghostLanded);
-		setVisible(this.gapParts, landed);
-		const stand = apparentParts(spin, shown, frame.origin, ring(0, 0, 0), ring(0, 0, 0)).sum;
-		const weight = Math.hypot(stand[0], stand[1], stand[2]);
-		directionToStage(frame, stand, this.plumb);
-		for (let k = 0; k < 3; k++) this.plumb[k] = weight > 0 ? (this.plumb[k] as number) / weight : 0;
+		this.hasLanded = shown >= drop.flight.end - 1e-9;
+		this.ghostHasLanded = drop.ghost.end !== null && (shown >= drop.ghost.end || this.hasLanded);
+		setVisible(this.landed, this.hasLanded);
+		setVisible(this.ghostLanded, this.ghostHasLanded);
+		setVisible(this.gapParts, this.hasLanded);
+		this.hangPlumb(shown);
 		this.turnSky(shown);
+	}
+
+	private force(out: Float64Array, from: number): void {
+		putDirection(this.frame, this.parts6[from] as number, this.parts6[from + 1] as number, 0, out);
+	}
+
+	/** Apparent gravity of someone standing still at the feet. */
+	private hangPlumb(t: number): void {
+		const { origin } = this.frame;
+		const f = this.parts6;
+		writeApparent(this.spin, t, origin[0], origin[1], 0, 0, f);
+		const gx = (f[0] as number) + (f[4] as number);
+		const gy = (f[1] as number) + (f[5] as number);
+		const weight = Math.hypot(gx, gy);
+		if (weight > 0) putDirection(this.frame, gx / weight, gy / weight, 0, this.plumb);
+		else this.plumb.fill(0);
 	}
 
 	/** ICRS → stage at time t. */

@@ -67,7 +67,9 @@ const drawn = new Float64Array(3);
 /** `placeAlong` for an instrument: the direction as drawn there, its length kept in proportion. */
 function placeDrawn(camera: Camera, matrix: Float32Array, at: Float64Array, dx: number, dy: number, dz: number, size: number): void {
 	hudDirection(camera, at, dx, dy, dz, drawn);
-	const [x, y, z] = drawn as unknown as [number, number, number];
+	const x = drawn[0] as number;
+	const y = drawn[1] as number;
+	const z = drawn[2] as number;
 	const l = Math.max(1e-6, Math.hypot(x, y, z));
 	placeAlong(matrix, at[0] as number, at[1] as number, at[2] as number, x / l, y / l, z / l, l * size, size);
 }
@@ -158,14 +160,11 @@ export function createAxisCue(): AxisCue {
 		set(camera, width, height, px, py, arm) {
 			hudPoint(camera, width, height, px, py, origin);
 			const long = arm * metresPerPixel(camera, height);
-			const [x, y, z] = origin as unknown as [number, number, number];
 			for (let i = 0; i < 3; i++) {
-				const [dx, dy, dz] = (AXES[i] as (typeof AXES)[number]).d;
-				placeDrawn(camera, (lines[i] as Part).matrix, origin, dx, dy, dz, long);
+				const { d } = AXES[i] as (typeof AXES)[number];
+				placeDrawn(camera, (lines[i] as Part).matrix, origin, d[0], d[1], d[2], long);
 				const tip = tips[i] as Float64Array;
-				tip[0] = x + (drawn[0] as number) * long * 1.12;
-				tip[1] = y + (drawn[1] as number) * long * 1.12;
-				tip[2] = z + (drawn[2] as number) * long * 1.12;
+				for (let k = 0; k < 3; k++) tip[k] = (origin[k] as number) + (drawn[k] as number) * long * 1.12;
 			}
 		},
 	};
