@@ -25,7 +25,8 @@ export function number(q: Quantity, description: string) {
 export const text = (description: string) => described(description, z.string({ error: "a text" }));
 
 export const ID_LENGTH = 100;
-const ID = /^[^\p{Cc}\p{Cs}]*$/u;
+// biome-ignore lint/suspicious/noControlCharactersInRegex: control characters are what an id may not hold
+const ID = /^[^\u0000-\u001f\u007f-\u009f]*$/;
 
 /** A name that others refer by: 1 to 100 characters, none of them a control character. */
 export function id(description: string) {

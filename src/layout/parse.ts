@@ -1,8 +1,8 @@
 import * as z from "zod/mini";
 import { checkLayout } from "./check/layout.ts";
-import { explain } from "./explain.ts";
+import { type Accepted, explain } from "./explain.ts";
 import { migrate } from "./migrate.ts";
-import { partsOf, readParts } from "./parts.ts";
+import { acceptedParts, partsOf } from "./parts.ts";
 import { type Problem, WHOLE_FILE } from "./problem.ts";
 import { MOST_BYTES, scanJson } from "./scan.ts";
 import { type LayoutFile, layoutSchema } from "./schema.ts";
@@ -46,13 +46,14 @@ function judge(value: unknown, found: Iterable<Problem>): ParseResult {
 	const migrated = migrate(value);
 	if (!migrated.ok) return migrated;
 	const parsed = z.safeParse(layoutSchema, migrated.value, FIRST_FAULT);
+	const accepted: Accepted = new Set();
 	const problems = parsed.success
 		? atMost(MOST_PROBLEMS, found, checkLayout(partsOf(parsed.data)))
 		: atMost(
 				MOST_PROBLEMS,
 				found,
-				explain(layoutSchema, migrated.value),
-				lazily(() => checkLayout(readParts(migrated.value))),
+				explain(layoutSchema, migrated.value, accepted),
+				lazily(() => checkLayout(acceptedParts(migrated.value, accepted))),
 			);
 	if (problems.length > 0) return { ok: false, problems };
 	if (!parsed.success) throw new Error(`a layout was refused without a reason: ${parsed.error.message}`);

@@ -1,25 +1,16 @@
-import * as z from "zod/mini";
-import { activity } from "./activity.ts";
-import { element } from "./element.ts";
+import type { Accepted } from "./explain.ts";
 import { below } from "./problem.ts";
-import {
-	type ActivityFile,
-	type AssumptionOverrides,
-	assumptions,
-	type CrewMember,
-	type CriterionOwn,
-	crewMember,
-	type DeckFile,
-	deck,
-	type ElementFile,
-	type LayoutFile,
-	ownCriterion,
-	type PhaseFile,
-	phase,
-	type SpinFile,
-	spin,
-	type Tailoring,
-	tailoring,
+import type {
+	ActivityFile,
+	AssumptionOverrides,
+	CrewMember,
+	CriterionOwn,
+	DeckFile,
+	ElementFile,
+	LayoutFile,
+	PhaseFile,
+	SpinFile,
+	Tailoring,
 } from "./schema.ts";
 
 /** One readable entry of a list and its path. */
@@ -57,53 +48,57 @@ export interface LayoutParts {
 	readonly assumptions: AssumptionOverrides | null;
 }
 
-type Read = <T>(schema: z.core.$ZodType<T>, value: unknown) => T | undefined;
+/** Whether what stands at the first path may be taken for what its place wants; the others are those it lies in. */
+type Trust = (...paths: readonly string[]) => boolean;
 
 const get = (value: unknown, key: string): unknown =>
 	typeof value === "object" && value !== null && Object.hasOwn(value, key) ? (value as Record<string, unknown>)[key] : undefined;
 
-function listOf<T>(read: Read, schema: z.core.$ZodType<T>, list: unknown, path: string): Parts<T> {
+function listOf<T>(trust: Trust, holder: unknown, within: string, key: string): Parts<T> {
+	const list = get(holder, key);
+	const path = below(within, key);
+	const items: readonly unknown[] = Array.isArray(list) ? list : [];
 	const entries: Part<T>[] = [];
 	const ids: Part<string>[] = [];
 	const byId = new Map<string, T>();
-	for (const [i, item] of (Array.isArray(list) ? list : []).entries()) {
-		const value = read(schema, item);
-		if (value !== undefined) entries.push({ path: below(path, i), value });
+	for (const [i, item] of items.entries()) {
+		const at = below(path, i);
+		const readable = trust(at, path, within);
+		if (readable) entries.push({ path: at, value: item as T });
 		const id = get(item, "id");
 		if (typeof id !== "string") continue;
-		ids.push({ path: below(below(path, i), "id"), value: id });
-		if (value !== undefined && !byId.has(id)) byId.set(id, value);
+		ids.push({ path: below(at, "id"), value: id });
+		if (readable && !byId.has(id)) byId.set(id, item as T);
 	}
 	const present = list === undefined || Array.isArray(list);
-	const whole = present && (list === undefined || entries.length === list.length);
-	return { path, entries, ids, known: new Set(ids.map((i) => i.value)), byId, whole, present };
+	return { path, entries, ids, known: new Set(ids.map((i) => i.value)), byId, whole: present && entries.length === items.length, present };
 }
 
 const stringsOf = (list: unknown, path: string): Part<string>[] =>
 	Array.isArray(list) ? list.flatMap((value, i) => (typeof value === "string" ? [{ path: below(path, i), value }] : [])) : [];
 
-function parts(file: unknown, read: Read): LayoutParts {
+function parts(file: unknown, trust: Trust): LayoutParts {
 	const habitat = get(file, "habitat");
 	const criteria = get(file, "criteria");
-	const spinRead = read(spin, get(habitat, "spin"));
-	const overrides = get(file, "assumptions");
+	const spin = get(habitat, "spin");
+	const assumptions = get(file, "assumptions") ?? {};
 	return {
-		spin: spinRead === undefined ? null : { path: "habitat.spin", value: spinRead },
-		phases: listOf(read, phase, get(habitat, "phases"), "habitat.phases"),
-		decks: listOf(read, deck, get(habitat, "decks"), "habitat.decks"),
-		elements: listOf<ElementFile>(read, element, get(file, "elements"), "elements"),
-		crew: listOf(read, crewMember, get(file, "crew"), "crew"),
-		activities: listOf<ActivityFile>(read, activity, get(file, "activities"), "activities"),
+		spin: trust("habitat.spin", "habitat") ? { path: "habitat.spin", value: spin as SpinFile } : null,
+		phases: listOf(trust, habitat, "habitat", "phases"),
+		decks: listOf(trust, habitat, "habitat", "decks"),
+		elements: listOf(trust, file, "", "elements"),
+		crew: listOf(trust, file, "", "crew"),
+		activities: listOf(trust, file, "", "activities"),
 		use: stringsOf(get(criteria, "use"), "criteria.use"),
-		own: listOf(read, ownCriterion, get(criteria, "own"), "criteria.own"),
-		tailor: listOf(read, tailoring, get(criteria, "tailor"), "criteria.tailor"),
-		assumptions: overrides === undefined ? {} : (read(assumptions, overrides) ?? null),
+		own: listOf(trust, criteria, "criteria", "own"),
+		tailor: listOf(trust, criteria, "criteria", "tailor"),
+		assumptions: get(file, "assumptions") === undefined || trust("assumptions") ? (assumptions as AssumptionOverrides) : null,
 	};
 }
 
 /** The parts of a layout that the schema has accepted. */
-export const partsOf = (layout: LayoutFile): LayoutParts =>
-	parts(layout, <T>(_: z.core.$ZodType<T>, value: unknown) => value as T | undefined);
+export const partsOf = (layout: LayoutFile): LayoutParts => parts(layout, () => true);
 
-/** The readable parts of a file that the schema has refused. */
-export const readParts = (file: unknown): LayoutParts => parts(file, (schema, value) => z.safeParse(schema, value).data);
+/** The readable parts of a file that has been explained to the end. */
+export const acceptedParts = (file: unknown, accepted: Accepted): LayoutParts =>
+	parts(file, (...paths) => paths.some((p) => accepted.has(p)));

@@ -20,7 +20,6 @@ function tooLong(text: string): boolean {
 
 const NUMBER = /-?(?:0|[1-9]\d*)(?:\.\d+)?(?:[eE][+-]?\d+)?/y;
 const ESCAPE = /\\(?:["\\/bfnrt]|u[0-9a-fA-F]{4})/y;
-const SPACE = /[ \t\n\r]*/y;
 const QUOTE = 0x22;
 const BACKSLASH = 0x5c;
 const SPACE_CODE = 0x20;
@@ -53,7 +52,11 @@ export function scanJson(text: string): Scan {
 	}
 	const problems: Problem[] = [];
 	let at = 0;
+	const trail: (string | number)[] = [];
 
+	const space = (): void => {
+		for (let c = text.charCodeAt(at); c === 0x20 || c === 0x0a || c === 0x0d || c === 0x09; c = text.charCodeAt(at)) at++;
+	};
 	const skip = (pattern: RegExp): boolean => {
 		pattern.lastIndex = at;
 		if (!pattern.test(text)) return false;
@@ -74,22 +77,22 @@ export function scanJson(text: string): Scan {
 		return text.slice(start, at);
 	};
 	const close = (end: string): boolean => {
-		skip(SPACE);
+		space();
 		const c = text[at];
 		if (c !== "," && c !== end) throw new Fault(at, `a comma or ${end}`);
 		at++;
 		return c === end;
 	};
-	const value = (path: string, depth: number): void => {
-		skip(SPACE);
+	const value = (depth: number): void => {
+		space();
 		const c = text[at];
 		if (c === "{" || c === "[") {
 			if (depth >= MOST_DEPTH) throw new Fault(at, `nesting at most ${MOST_DEPTH} deep`);
 			at++;
-			skip(SPACE);
+			space();
 			if (text[at] === (c === "{" ? "}" : "]")) at++;
-			else if (c === "{") members(path, depth + 1);
-			else items(path, depth + 1);
+			else if (c === "{") members(depth + 1);
+			else items(depth + 1);
 		} else if (c === '"') string("a text");
 		else if (!skip(NUMBER)) {
 			const word = WORDS.find((w) => text.startsWith(w, at));
@@ -97,30 +100,34 @@ export function scanJson(text: string): Scan {
 			at += word.length;
 		}
 	};
-	const members = (path: string, depth: number): void => {
+	const members = (depth: number): void => {
 		const seen = new Set<string>();
 		do {
-			skip(SPACE);
+			space();
 			const raw = string("a key in quotation marks");
 			const key = raw.includes("\\") ? (JSON.parse(raw) as string) : raw.slice(1, -1);
-			const here = below(path, key);
-			if (seen.has(key)) problems.push({ path: here, value: "written twice", expected: "each key once in an object" });
+			trail.push(key);
+			if (seen.has(key)) problems.push({ path: trail.reduce(below, ""), value: "written twice", expected: "each key once in an object" });
 			seen.add(key);
-			skip(SPACE);
+			space();
 			if (text[at] !== ":") throw new Fault(at, "a colon");
 			at++;
-			value(here, depth);
+			value(depth);
+			trail.pop();
 		} while (!close("}"));
 	};
-	const items = (path: string, depth: number): void => {
+	const items = (depth: number): void => {
 		let i = 0;
-		do value(below(path, i++), depth);
-		while (!close("]"));
+		do {
+			trail.push(i++);
+			value(depth);
+			trail.pop();
+		} while (!close("]"));
 	};
 
 	try {
-		value("", 0);
-		skip(SPACE);
+		value(0);
+		space();
 		if (at < text.length) throw new Fault(at, "the end of the file");
 	} catch (fault) {
 		if (!(fault instanceof Fault)) throw fault;
