@@ -6,6 +6,11 @@ import type { Surface } from "./surface.ts";
 export const TOUCHING = 1e-9;
 /** A first root is polished to this, s. */
 const ROOT = 1e-12;
+/** A step that was aimed at a surface and ends this near to it (m) has met it, on whichever side it ends. */
+const MET = 1e-10;
+
+/** A gap's rate this small (m/s) is none: rounding, for a body whose pace in the ring is bounded by `pace`. */
+export const stillness = (pace: number): number => 1e-12 + 2e-15 * pace;
 
 export interface Contact {
 	readonly surface: Surface;
@@ -32,6 +37,8 @@ const bounds: Bounds = { radius: 0, speed: 0, acceleration: 0 };
 export function firstContact(stretch: Stretch, surfaces: readonly Surface[], from: number, to: number, leaving: Set<Surface>): Contact | null {
 	const { path, spin } = stretch;
 	let t = from;
+	let before = from;
+	let aimed: Surface | null = null;
 	for (let guard = 0; guard < 1_000_000; guard++) {
 		path.stateAt(t, state);
 		const radius = Math.hypot(state[0] as number, state[1] as number);
@@ -43,17 +50,18 @@ export function firstContact(stretch: Stretch, surfaces: readonly Surface[], fro
 		for (let i = 0; i < surfaces.length; i++) {
 			const surface = surfaces[i] as Surface;
 			const gap = surface.gap(state);
+			const rate = surface.rate(state);
 			if (leaving.size > 0 && leaving.has(surface)) {
-				if (gap > TOUCHING) leaving.delete(surface);
+				const back = rate < -stillness(pace);
+				if (gap > TOUCHING || (back && gap >= 0)) leaving.delete(surface);
+				else if (back) return { surface, t: turnedBack(path, surface, before, t) };
 				else {
-					step = Math.min(step, 1e-3);
+					step = Math.min(step, Math.max(1e-6, t - from));
 					continue;
 				}
 			}
-			const rate = surface.rate(state);
-			if (gap <= 0) {
-				if (rate < 0 || gap < -TOUCHING) return { surface, t };
-			}
+			if (gap <= 0 && (rate < 0 || gap < -TOUCHING)) return { surface, t };
+			if (surface === aimed && rate >= 0 && gap <= MET) return { surface, t };
 			const safe = timeToClose(Math.max(gap, 0), rate, surface.bend(bounds));
 			if (safe < step) {
 				step = safe;
@@ -61,10 +69,25 @@ export function firstContact(stretch: Stretch, surfaces: readonly Surface[], fro
 			}
 		}
 		if (nearest && step <= ROOT * Math.max(1, t)) return t + step <= to ? { surface: nearest, t: t + step } : null;
+		before = t;
+		aimed = nearest;
 		t += step;
 		if (t >= to || horizon <= 0) return null;
 	}
 	throw new RangeError(`the search for a contact did not end (t = ${t} s of ${to} s)`);
+}
+
+/** When a body that had left a surface by less than `TOUCHING` is back at it: between a time before it turned and one after. */
+function turnedBack(path: Path, surface: Surface, before: number, after: number): number {
+	let low = before;
+	let high = after;
+	for (let i = 0; i < 60; i++) {
+		const middle = (low + high) / 2;
+		path.stateAt(middle, state);
+		if (surface.gap(state) < 0 && surface.rate(state) < 0) high = middle;
+		else low = middle;
+	}
+	return high;
 }
 
 /** The least t > 0 at which gap + rate t − bend t²/2 = 0. */

@@ -1,3 +1,4 @@
+import { type RingVec, ring } from "../vector/vec3.ts";
 import type { Bounds, State } from "./path.ts";
 import type { Surface } from "./surface.ts";
 
@@ -5,7 +6,7 @@ import type { Surface } from "./surface.ts";
  * A convex body struck by the sphere. Distance to a convex set is a convex function of place, so along
  * a path its rate falls no faster than the acceleration.
  */
-abstract class Convex implements Surface {
+export abstract class Convex implements Surface {
 	readonly kind: "element" | "coaming";
 	readonly id: string;
 	protected readonly half: number;
@@ -24,6 +25,11 @@ abstract class Convex implements Surface {
 	}
 	bend(b: Bounds): number {
 		return b.acceleration;
+	}
+	/** The point of the body nearest to a centre. */
+	touched(s: State): RingVec {
+		const reach = this.half + this.gap(s);
+		return ring(s[0]! - reach * this.nx, s[1]! - reach * this.ny, s[2]! - reach * this.nz);
 	}
 	/** Distance of the offset (dx, dy, dz) from the nearest point, keeping its direction. */
 	protected away(dx: number, dy: number, dz: number): number {

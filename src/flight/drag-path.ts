@@ -2,8 +2,11 @@ import type { Spin } from "../frame/spin.ts";
 import type { RingVec } from "../vector/vec3.ts";
 import type { Path, State } from "./path.ts";
 
-/** Relative tolerance of the integration, on the way gone since release and on the speed. */
-export const RELATIVE_TOLERANCE = 1e-9;
+/**
+ * Relative tolerance of a step, on the way gone since release and on the speed, both inertial: a tenth of what a
+ * landing is to keep, 1e-9, because errors gather over the steps.
+ */
+export const RELATIVE_TOLERANCE = 1e-10;
 /** Way (m) and speed (m/s) below which the tolerance no longer shrinks. */
 const FLOOR = 0.01;
 
@@ -104,7 +107,7 @@ export class DragPath implements Path {
 			if (!(h > 1e-14)) throw new RangeError(`the drag integration stalled at t = ${t} s`);
 			this.stage(t, y, h, end);
 			const error = this.stepError(h, end);
-			const factor = Math.min(5, Math.max(0.2, 0.9 * error ** -0.2));
+			const factor = Number.isFinite(error) ? Math.min(5, Math.max(0.2, 0.9 * error ** -0.2)) : 0.2;
 			if (error <= 1) {
 				this.keep(t, h, end);
 				this.next = h * factor;

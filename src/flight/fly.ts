@@ -1,11 +1,12 @@
 import type { Spin } from "../frame/spin.ts";
 import type { Deck } from "../layout/habitat.ts";
 import { type RingVec, ring } from "../vector/vec3.ts";
-import { type Contact, firstContact, type Stretch, TOUCHING } from "./contact.ts";
+import { type Contact, firstContact, type Stretch, stillness, TOUCHING } from "./contact.ts";
 import { DragPath } from "./drag-path.ts";
 import type { CoamingSurface, EdgePoint, Hatchway } from "./hatchway.ts";
 import { type Path, type State, StraightPath } from "./path.ts";
 import { ceilingSurface, CylinderFromWithin, CylinderFromWithout, floorSurface, Plane, type Surface, wallSurfaces } from "./surface.ts";
+import { pointTouched } from "./touched.ts";
 import { bodySurfaces, paneAt, type World } from "./world.ts";
 
 /** A sphere let go at t = 0: ring position of its centre (m), velocity relative to the ring (m/s). */
@@ -31,10 +32,13 @@ export interface Flight {
 	readonly path: Path;
 	/** Ring state of the centre at `end`. */
 	readonly state: State;
+	/** What was touched: of a pane or a closed hatch the face it lies in; null where nothing was. */
+	readonly surface: Surface | null;
 	/** The nearest point of the edge, where a coaming was struck. */
 	readonly edge: EdgePoint | null;
-	/** Hatches gone through, in order. */
+	/** Hatches gone through, in order, and when, s. */
 	readonly passed: readonly string[];
+	readonly passedAt: readonly number[];
 }
 
 const NO_FIELD = ring(0, 0, 0);
@@ -56,6 +60,7 @@ abstract class Journey {
 	protected readonly until: number;
 	protected readonly state: State = new Float64Array(6);
 	private readonly passed: string[] = [];
+	private readonly passedAt: number[] = [];
 	abstract readonly path: Path;
 
 	constructor(
@@ -81,7 +86,8 @@ abstract class Journey {
 		let t = 0;
 		for (let hops = 0; hops < 10_000; hops++) {
 			const surfaces = this.surfacesOf(place);
-			const contact = this.next(surfaces, t, this.leavingAt(surfaces, t));
+			const { pressed, leaving } = this.touchedAt(surfaces, t);
+			const contact = pressed ? { surface: pressed, t } : this.next(surfaces, t, leaving);
 			if (!contact) return this.finish({ kind: "none" }, this.until, null);
 			t = contact.t;
 			this.settle(t);
@@ -89,6 +95,7 @@ abstract class Journey {
 			if (place.kind === "shaft") {
 				if (surface.kind === "far-end") {
 					this.passed.push(place.way.hatch.id);
+					this.passedAt.push(t);
 					const onward: number | null = place.down ? place.way.hatch.below : place.way.hatch.deck;
 					if (onward === null) return this.finish({ kind: "outside" }, t, null);
 					place = { kind: "bay", deck: onward };
@@ -101,15 +108,15 @@ abstract class Journey {
 					continue;
 				}
 				if (surface.kind === "coaming")
-					return this.finish({ kind: "coaming", id: surface.id, deck: place.way.hatch.deck }, t, (surface as CoamingSurface).edge(this.state));
-				return this.strike(surface, place.way.hatch.deck, t);
+					return this.finish({ kind: "coaming", id: surface.id, deck: place.way.hatch.deck }, t, surface, (surface as CoamingSurface).edge(this.state));
+				return this.strike(surface, surface instanceof WithinBay ? surface.deck : place.way.hatch.deck, t);
 			}
 			const way = this.openingAt(surface, place.deck);
 			if (way && !way.hatch.solid) {
 				place = { kind: "shaft", way, down: surface.kind === "deck" };
 				continue;
 			}
-			if (way) return this.finish({ kind: "element", id: way.hatch.id, deck: place.deck }, t, null);
+			if (way) return this.finish({ kind: "element", id: way.hatch.id, deck: place.deck }, t, surface);
 			return this.strike(surface, place.deck, t);
 		}
 		throw new RangeError(`a flight went through more than 10000 hatch ends (t = ${t} s)`);
@@ -118,25 +125,27 @@ abstract class Journey {
 	private strike(surface: Surface, deck: number, t: number): Flight {
 		if (surface.kind === "far-end" || surface.kind === "near-end") throw new RangeError(`a shaft end was struck in deck ${deck}`);
 		if (surface.kind !== "element" && surface.kind !== "coaming") {
+			const own = this.world.habitat.decks[deck] as Deck;
 			const face = surface.kind === "deck" ? "floor" : surface.kind;
-			const pane = paneAt(this.world, this.world.habitat.decks[deck] as Deck, face, this.state);
-			if (pane) return this.finish({ kind: "element", id: pane.id, deck }, t, null);
+			const pane = paneAt(this.world, own, face, pointTouched(own, surface.kind, this.state));
+			if (pane) return this.finish({ kind: "element", id: pane.id, deck }, t, surface);
 		}
-		return this.finish({ kind: surface.kind, id: surface.id, deck }, t, null);
+		return this.finish({ kind: surface.kind, id: surface.id, deck }, t, surface);
 	}
 
-	private finish(struck: Struck, end: number, edge: EdgePoint | null): Flight {
+	private finish(struck: Struck, end: number, surface: Surface | null, edge: EdgePoint | null = null): Flight {
 		if (struck.kind === "none") this.settle(end);
-		return { struck, end, path: this.path, state: this.state, edge, passed: this.passed };
+		return { struck, end, path: this.path, state: this.state, surface, edge, passed: this.passed, passedAt: this.passedAt };
 	}
 
 	/** The hatch through which a floor or ceiling contact is none, or null. */
 	private openingAt(surface: Surface, deck: number): Hatchway | null {
 		if (surface.kind !== "deck" && surface.kind !== "ceiling") return null;
-		const angle = Math.atan2(this.state[1] as number, this.state[0] as number);
+		const [x, y, z] = pointTouched(this.world.habitat.decks[deck] as Deck, surface.kind, this.state);
+		const angle = Math.atan2(y, x);
 		for (const way of this.world.ways) {
 			const here = surface.kind === "deck" ? way.hatch.deck === deck : way.hatch.below === deck;
-			if (here && way.admits(angle, this.state[2] as number)) return way;
+			if (here && way.admits(angle, z)) return way;
 		}
 		return null;
 	}
@@ -152,54 +161,72 @@ abstract class Journey {
 			way.outerEnd(half, down ? "far-end" : "near-end"),
 			way.innerEnd(half, down ? "near-end" : "far-end"),
 			...way.coaming(half),
-			...wallSurfaces(way.deck, half).map((wall) => new OnlyAbove(wall, floorSurface(way.deck, 0))),
+			...wallsWithin(way.deck, half, floorSurface(way.deck, 0)),
+			...(way.below ? wallsWithin(way.below, half, ceilingSurface(way.below, 0)) : []),
 			...this.bodies,
 		];
 	}
 
-	/** Surfaces touched at t from which the body moves away or on which it rests. */
-	private leavingAt(surfaces: readonly Surface[], t: number): Set<Surface> {
+	/**
+	 * Of the surfaces touched at t: one that the body moves into, and those that it moves away from or rests at. One
+	 * that it neither nears nor leaves is looked at a little later, when its acceleration has told.
+	 */
+	private touchedAt(surfaces: readonly Surface[], t: number): { readonly pressed: Surface | null; readonly leaving: Set<Surface> } {
 		const leaving = new Set<Surface>();
 		const s = this.state;
+		let pressed: Surface | null = null;
 		for (const surface of surfaces) {
 			this.path.stateAt(t, s);
-			if (surface.gap(s) > TOUCHING) continue;
-			const rate = surface.rate(s);
-			if (rate > 1e-12) leaving.add(surface);
-			else if (rate > -1e-12) {
-				this.path.stateAt(t + 1e-6, s);
+			const gap = surface.gap(s);
+			if (gap > TOUCHING) continue;
+			const w = this.spin.greatestRate;
+			const r = Math.hypot(s[0] as number, s[1] as number);
+			const still = stillness(Math.hypot(s[3] as number, s[4] as number, s[5] as number) + 2 * w * r);
+			let rate = surface.rate(s);
+			if (Math.abs(rate) <= still) {
+				this.path.stateAt(Math.min(t + 1e-3, this.path.known), s);
 				surface.gap(s);
-				if (surface.rate(s) >= 0) leaving.add(surface);
+				rate = surface.rate(s);
 			}
+			if (rate < -still || (gap < -INSIDE && isWall(surface))) pressed ??= surface;
+			else leaving.add(surface);
 		}
-		return leaving;
+		return { pressed, leaving };
 	}
 }
 
-/** A bulkhead of the bay above a hatch: it ends at the floor. */
-class OnlyAbove implements Surface {
+/** A body this far (m) inside a bulkhead or an element is not touching it but in it: it strikes there and then. */
+const INSIDE = 1e-6;
+const isWall = ({ kind }: Surface): boolean => kind === "element" || kind.startsWith("end-") || kind.startsWith("side-");
+
+/** A bulkhead of the bay above or below a hatch: it ends at that bay's floor or ceiling. */
+class WithinBay implements Surface {
 	readonly kind: Surface["kind"];
 	readonly id: string;
-	private above = true;
+	private within = true;
 	constructor(
+		readonly deck: number,
 		private readonly wall: Surface,
-		private readonly floor: Surface,
+		private readonly face: Surface,
 	) {
 		this.kind = wall.kind;
 		this.id = wall.id;
 	}
 	gap(s: State): number {
-		const height = this.floor.gap(s);
-		this.above = height >= 0;
-		return this.above ? this.wall.gap(s) : Math.max(-height, 1e-6);
+		const height = this.face.gap(s);
+		this.within = height >= 0;
+		return this.within ? this.wall.gap(s) : Math.max(-height, 1e-6);
 	}
 	rate(s: State): number {
-		return this.above ? this.wall.rate(s) : -Math.abs(this.floor.rate(s));
+		return this.within ? this.wall.rate(s) : -Math.abs(this.face.rate(s));
 	}
 	bend(b: Parameters<Surface["bend"]>[0]): number {
-		return this.above ? this.wall.bend(b) : this.floor.bend(b);
+		return this.within ? this.wall.bend(b) : this.face.bend(b);
 	}
 }
+
+const wallsWithin = (deck: Deck, half: number, face: Surface): Surface[] =>
+	wallSurfaces(deck, half).map((wall) => new WithinBay(deck.index, wall, face));
 
 class Free extends Journey {
 	readonly path: StraightPath;

@@ -74,7 +74,8 @@ export class Hatchway {
 	/** Where the centre is d/2 beyond the shaft's outer end, and d/2 above the floor; each met from inside the shaft. */
 	outerEnd(half: number, kind: Surface["kind"]): Surface {
 		const { below, deck } = this;
-		const shaft = below !== null && radiusOf(below, this.hatch.angle, below.headroom) > radiusOf(deck, this.hatch.angle, 0);
+		const { angle } = this.hatch;
+		const shaft = below !== null && radiusOf(below, angle, below.headroom) >= radiusOf(deck, angle, 0) - 1e-9;
 		return shaft ? floorSurface({ ...below, radius: below.radius - below.headroom }, -half, kind) : floorSurface(deck, -half, kind);
 	}
 	innerEnd(half: number, kind: Surface["kind"]): Surface {
@@ -226,7 +227,7 @@ class RoundCoaming implements CoamingSurface {
 		return q;
 	}
 
-	/** The edge parameter of the nearest line: the best of a fan, then golden section. */
+	/** The edge parameter of the nearest line: the best of a fan, golden section, then the vertex of the parabola at its end. */
 	private nearest(s: State): number {
 		const fan = 24;
 		let best = 0;
@@ -246,7 +247,7 @@ class RoundCoaming implements CoamingSurface {
 		let q = a + golden * (b - a);
 		let fp = this.square(s, p, false);
 		let fq = this.square(s, q, false);
-		while (b - a > 1e-9) {
+		while (b - a > 1e-4) {
 			if (fp < fq) {
 				b = q;
 				q = p;
@@ -261,7 +262,16 @@ class RoundCoaming implements CoamingSurface {
 				fq = this.square(s, q, false);
 			}
 		}
-		return (a + b) / 2;
+		return this.vertex(s, this.vertex(s, (a + b) / 2));
+	}
+
+	/** A section search stalls where the square no longer tells; the vertex of the parabola through three points does not. */
+	private vertex(s: State, parameter: number): number {
+		const h = 1e-5;
+		const low = this.square(s, parameter - h, false);
+		const high = this.square(s, parameter + h, false);
+		const bend = low - 2 * this.square(s, parameter, false) + high;
+		return bend > 0 ? parameter + (h * (low - high)) / (2 * bend) : parameter;
 	}
 
 	gap(s: State): number {

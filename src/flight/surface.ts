@@ -77,7 +77,8 @@ export class Plane implements Surface {
 
 /**
  * A side bulkhead: the half-plane through the axis at one angle. Beyond a quarter turn from it the
- * nearest thing is the axis itself, which no bay reaches, so the gap there is the radius.
+ * nearest thing is the axis itself, which no bay reaches. `behind` is how far behind it (rad) still counts as
+ * in it: half of what the bay leaves open of the turn, since a bay of more than 270° comes round to its back.
  */
 export class HalfPlane implements Surface {
 	private readonly cos: number;
@@ -88,6 +89,7 @@ export class HalfPlane implements Surface {
 		readonly id: string,
 		readonly angle: number,
 		readonly half: number,
+		private readonly behind: number,
 	) {
 		this.cos = Math.cos(angle);
 		this.sin = Math.sin(angle);
@@ -95,10 +97,11 @@ export class HalfPlane implements Surface {
 	gap(s: State): number {
 		const x = s[0] as number;
 		const y = s[1] as number;
-		this.beside = this.cos * x + this.sin * y > 0;
-		if (!this.beside) return Math.hypot(x, y);
-		const ahead = this.cos * y - this.sin * x;
-		return (this.kind === "side-low" ? ahead : -ahead) - this.half;
+		const along = this.cos * x + this.sin * y;
+		const turn = this.cos * y - this.sin * x;
+		const ahead = this.kind === "side-low" ? turn : -turn;
+		this.beside = along > 0 && (ahead >= 0 || Math.atan2(-ahead, along) <= this.behind);
+		return (this.beside ? ahead : Math.hypot(x, y)) - this.half;
 	}
 	rate(s: State): number {
 		if (!this.beside) return -Math.hypot(s[3] as number, s[4] as number);
@@ -129,6 +132,7 @@ export function wallSurfaces(deck: Deck, half: number): Surface[] {
 		new Plane("end-low", deck.id, 0, 0, 1, -(deck.axialFrom + half)),
 		new Plane("end-high", deck.id, 0, 0, -1, deck.axialTo - half),
 	];
-	if (!deck.closed) walls.push(new HalfPlane("side-low", deck.id, deck.from, half), new HalfPlane("side-high", deck.id, deck.to, half));
+	const behind = Math.PI - (deck.to - deck.from) / 2;
+	if (!deck.closed) walls.push(new HalfPlane("side-low", deck.id, deck.from, half, behind), new HalfPlane("side-high", deck.id, deck.to, half, behind));
 	return walls;
 }

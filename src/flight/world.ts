@@ -1,11 +1,11 @@
 import type { Deck, Habitat, WindowOpening } from "../layout/habitat.ts";
 import { angleNear, floorAlong, heightAbove } from "../layout/habitat.ts";
 import { type ElementBody, elementBodies } from "../layout/solid.ts";
-import { ring } from "../vector/vec3.ts";
+import type { RingVec } from "../vector/vec3.ts";
 import { Box, Capsule } from "./convex.ts";
 import { Hatchway } from "./hatchway.ts";
-import type { State } from "./path.ts";
 import type { Surface } from "./surface.ts";
+import { tangentOf } from "./touched.ts";
 
 /** What flies can meet in a habitat, prepared once. */
 export interface World {
@@ -36,35 +36,29 @@ export function bodySurfaces(world: World, half: number): Surface[] {
 	);
 }
 
-/** The solid pane whose outline holds a contact with the given surface of a deck, or null. */
-export function paneAt(world: World, deck: Deck, surface: WindowOpening["surface"], s: State): WindowOpening | null {
-	for (const pane of world.panes) {
-		if (pane.deck === deck.index && pane.surface === surface && insidePane(deck, pane, s)) return pane;
-	}
-	return null;
+/** The solid pane whose outline holds the point (ring) touched on a surface of a deck, or null. */
+export function paneAt(world: World, deck: Deck, surface: WindowOpening["surface"], point: RingVec): WindowOpening | null {
+	return world.panes.find((pane) => pane.deck === deck.index && pane.surface === surface && insidePane(deck, pane, point)) ?? null;
 }
 
-function insidePane(deck: Deck, pane: WindowOpening, s: State): boolean {
-	const angle = Math.atan2(s[1] as number, s[0] as number);
-	const arc = () => floorAlong(deck, angleNear(angle, pane.angle)) - floorAlong(deck, pane.angle);
-	const rise = () => heightAbove(deck, ring(s[0] as number, s[1] as number, s[2] as number)) - pane.height;
-	let u: number;
-	let w: number;
-	switch (pane.surface) {
-		case "floor":
-		case "ceiling":
-			u = arc();
-			w = (s[2] as number) - pane.axial;
-			break;
-		case "end-low":
-		case "end-high":
-			u = (arc() * (deck.radius - pane.height)) / deck.radius;
-			w = rise();
-			break;
-		default:
-			u = (s[2] as number) - pane.axial;
-			w = rise();
-	}
-	if (pane.shape === "circle") return u * u + w * w <= (pane.along / 2) ** 2;
+/** In the surface's own plane: u along (arc, or a flat deck's tangent; axial on a side), w across (axial; up). */
+function insidePane(deck: Deck, pane: WindowOpening, point: RingVec): boolean {
+	const angle = angleNear(Math.atan2(point[1], point[0]), pane.angle);
+	const [height, axial] = [heightAbove(deck, point), point[2] - pane.axial];
+	const prograde =
+		deck.floor === "curved"
+			? (deck.radius - pane.height) * (angle - pane.angle)
+			: tangentOf(deck, point) - floorAlong(deck, pane.angle);
+	/** On a flat deck's side, which leans outward, up is longer than height. */
+	const lean = deck.floor === "curved" ? 1 : Math.cos(pane.angle - deck.middle);
+	const [u, w] = {
+		floor: [prograde, axial] as const,
+		ceiling: [prograde, axial] as const,
+		"end-low": [prograde, height - pane.height] as const,
+		"end-high": [prograde, height - pane.height] as const,
+		"side-low": [axial, (height - pane.height) / lean] as const,
+		"side-high": [axial, (height - pane.height) / lean] as const,
+	}[pane.surface];
+	if (pane.shape === "circle") return Math.hypot(u, w) <= pane.along / 2;
 	return Math.abs(u) <= pane.along / 2 && Math.abs(w) <= pane.across / 2;
 }
