@@ -1,16 +1,18 @@
+import { useFrame } from "@react-three/fiber";
 import { useEffect, useMemo } from "react";
-import type { Drawable } from "../../src/shape/drawable.ts";
+import type { DropPicture } from "../../src/shape/drop-picture.ts";
 import { dispose, wrap } from "./wrap.ts";
 
-/** What does not move: bay and elements. */
-export function Still({ drawables }: { readonly drawables: readonly Drawable[] }) {
+/** What does not move: bay and elements. Faces seen from behind are left out. */
+export function Still({ picture }: { readonly picture: DropPicture }) {
+	const drawables = picture.stage.still;
 	const objects = useMemo(
 		() =>
-			drawables.flatMap((d, i) => {
-				if (d.kind === "stars") return [];
+			drawables.map((d, i) => {
+				if (d.kind === "stars") throw new TypeError("stars are drawn by the sky");
 				const object = wrap(d, i);
 				object.matrixAutoUpdate = false;
-				return [object];
+				return object;
 			}),
 		[drawables],
 	);
@@ -20,5 +22,8 @@ export function Still({ drawables }: { readonly drawables: readonly Drawable[] }
 		},
 		[objects],
 	);
+	useFrame(() => {
+		for (let i = 0; i < objects.length; i++) (objects[i] as (typeof objects)[number]).visible = picture.seen[i] === 1;
+	});
 	return objects.map((object) => <primitive key={object.uuid} object={object} />);
 }

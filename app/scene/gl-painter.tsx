@@ -37,7 +37,7 @@ export async function createGlPainter(canvas: HTMLCanvasElement): Promise<Painte
 					<Lights />
 					<Viewpoint picture={picture} camera={camera} />
 					<Sky picture={picture} />
-					<Still key={`still ${keyOf(picture)}`} drawables={picture.stage.still} />
+					<Still key={`still ${keyOf(picture)}`} picture={picture} />
 					<Moving key={`moving ${keyOf(picture)}`} parts={picture.parts} onReady={() => (ready = true)} />
 				</>,
 			);

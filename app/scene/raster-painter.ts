@@ -1,5 +1,5 @@
 import { createRaster, type Raster, type RasterScene } from "../../src/raster/raster.ts";
-import type { Part } from "../../src/shape/drawable.ts";
+import type { Drawable, Part } from "../../src/shape/drawable.ts";
 import type { DropPicture } from "../../src/shape/drop-picture.ts";
 import { COLOUR } from "../../src/shape/palette.ts";
 import type { Painter } from "./painter.ts";
@@ -11,13 +11,13 @@ export function createRasterPainter(canvas: HTMLCanvasElement): Painter {
 	let raster: Raster | null = null;
 	let image: ImageData | null = null;
 	let picture: DropPicture | null = null;
-	let scene: (RasterScene & { readonly parts: Part[] }) | null = null;
+	let scene: (RasterScene & { readonly still: Drawable[]; readonly parts: Part[] }) | null = null;
 	return {
 		kind: "raster",
 		show(next) {
 			picture = next;
 			scene = {
-				still: [next.stage.stars, ...next.stage.still],
+				still: [next.stage.stars],
 				parts: [],
 				skyRotation: next.stage.skyRotation,
 				pixelRatio: 1,
@@ -36,6 +36,9 @@ export function createRasterPainter(canvas: HTMLCanvasElement): Painter {
 				image = new ImageData(raster.pixels, w, h);
 			}
 			scene.pixelRatio = w / width;
+			scene.still.length = 1;
+			const { still: fixed } = picture.stage;
+			for (let i = 0; i < fixed.length; i++) if (picture.seen[i] === 1) scene.still.push(fixed[i] as Drawable);
 			scene.parts.length = 0;
 			for (const p of picture.parts) if (p.visible !== false) scene.parts.push(p);
 			raster.render(scene, picture.camera, still ? 2 : 1);

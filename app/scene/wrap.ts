@@ -5,6 +5,8 @@ import { LineSegmentsGeometry } from "three/addons/lines/LineSegmentsGeometry.js
 import type { Triangles, WideLines } from "../../src/shape/drawable.ts";
 import { linearColours } from "./palette-linear.ts";
 
+// Lines lie 2 mm off their face and paint 1 mm: faces are pushed back a little so that both win at a slant.
+
 /** Draw order: opaque, painted, lines, translucent in list order, over everything in list order. */
 const ORDER = { opaque: 0, decal: 1, lines: 2, translucent: 1000, over: 100_000 } as const;
 
@@ -45,9 +47,9 @@ function wrapTriangles(d: Triangles, place: number): Mesh {
 		opacity: d.opacity,
 		depthTest: !over,
 		depthWrite: !(translucent || over || d.decal),
-		polygonOffset: d.decal,
-		polygonOffsetFactor: -1,
-		polygonOffsetUnits: -2,
+		polygonOffset: !over,
+		polygonOffsetFactor: d.decal ? 0.5 : 1,
+		polygonOffsetUnits: d.decal ? 0.5 : 1,
 	};
 	const mesh = new Mesh(geometry, d.lit ? new MeshLambertMaterial(look) : new MeshBasicMaterial(look));
 	mesh.name = d.name;
@@ -68,9 +70,6 @@ function wrapLines(d: WideLines, place: number): LineSegments2 {
 		depthTest: !over,
 		depthWrite: !over && d.opacity === 1,
 		dashed: d.dash !== null,
-		polygonOffset: true,
-		polygonOffsetFactor: -1,
-		polygonOffsetUnits: -6,
 	});
 	material.name = d.name;
 	if (d.dash) [material.dashSize, material.gapSize] = d.dash;

@@ -1,9 +1,11 @@
 import { type Arrow, createArrow } from "./arrow.ts";
+import { facesFromBehind } from "./bay.ts";
 import { aim, type Camera, createCamera, project } from "./camera.ts";
 import type { DropFigure } from "./drop-figure.ts";
 import type { DropStage } from "./drop-stage.ts";
 import type { Part } from "./drawable.ts";
 import { createAxisCue, createPanel, createPlumb, hudDirection, hudPoint, metresPerPixel } from "./hud.ts";
+import { fromStage } from "./stage-frame.ts";
 
 export type View = "eyepoint" | "external";
 
@@ -51,6 +53,8 @@ export class DropPicture {
 	readonly anchors: Readonly<Record<AnchorName, Anchor>> = Object.fromEntries(
 		ANCHORS.map((name) => [name, { point: new Float64Array(3), visible: false }]),
 	) as Record<AnchorName, Anchor>;
+	/** Which of the stage's still drawables are seen, by index: a bulkhead that stands between an outside camera and the bay is not. */
+	readonly seen: Uint8Array;
 	/** 1, or 10 where Coriolis and Euler are drawn ten times as long. */
 	minorFactor: 1 | 10 = 1;
 	/** Rectangles that the instruments take up, CSS px: left, top, right, bottom; empty ones are where none is. */
@@ -65,6 +69,7 @@ export class DropPicture {
 	private readonly plumb = createPlumb();
 	private readonly origin = new Float64Array(3);
 	private readonly drawn = new Float64Array(3);
+	private readonly seenFrom = new Float64Array(3).fill(Number.NaN);
 	private onRose = false;
 	private readonly pixel = new Float64Array(3);
 
@@ -72,6 +77,7 @@ export class DropPicture {
 		readonly stage: DropStage,
 		readonly figure: DropFigure,
 	) {
+		this.seen = new Uint8Array(stage.still.length).fill(1);
 		this.parts = [
 			...stage.parts,
 			...figure.parts,
@@ -119,10 +125,30 @@ export class DropPicture {
 		figure.update(t, view === "eyepoint");
 		if (view === "eyepoint") this.aimEye(look);
 		else this.aimExternal(look);
+		this.openFaces(view);
 		const room = width >= ROOM.width && height >= ROOM.height;
 		this.setForces(view, width, height, room);
 		this.setInstruments(view, width, height, room);
 		this.setMarks();
+	}
+
+	/** Takes away the faces that the camera sees from behind; only when the camera has moved. */
+	private openFaces(view: View): void {
+		const { position } = this.camera;
+		const { seenFrom, stage } = this;
+		if (view === "eyepoint") {
+			if (Number.isNaN(seenFrom[0])) return;
+			seenFrom.fill(Number.NaN);
+			this.seen.fill(1);
+			return;
+		}
+		if (seenFrom[0] === position[0] && seenFrom[1] === position[1] && seenFrom[2] === position[2]) return;
+		seenFrom.set(position);
+		const eye = fromStage(stage.frame, position[0] as number, position[1] as number, position[2] as number);
+		const behind = facesFromBehind(stage.habitat, stage.frame, eye).map((face) => `${face}:`);
+		stage.still.forEach((d, i) => {
+			this.seen[i] = behind.some((face) => d.name.startsWith(face)) ? 0 : 1;
+		});
 	}
 
 	/** Along the gaze, with the head's own up: looking down keeps "in front" at the top. What the person at the screen turns comes on top. */

@@ -4,7 +4,7 @@ import type { Spin } from "../frame/spin.ts";
 import type { Deck, Habitat } from "../layout/habitat.ts";
 import { writeRingFromIcrs } from "../sky/attitude.ts";
 import type { RingVec } from "../vector/vec3.ts";
-import { bayShape } from "./bay.ts";
+import { bayShapes } from "./bay.ts";
 import type { Drawable, Part, Stars } from "./drawable.ts";
 import { elementShapes } from "./elements.ts";
 import { objectShape } from "./elements-object.ts";
@@ -57,7 +57,7 @@ export class DropStage {
 	private readonly ringRotation = new Float64Array(9);
 
 	constructor(
-		private readonly habitat: Habitat,
+		readonly habitat: Habitat,
 		private readonly spin: Spin,
 		readonly drop: Drop,
 		readonly stars: Stars,
@@ -66,7 +66,7 @@ export class DropStage {
 		this.frame = stageFrame(deck, stance.angle, stance.axial);
 		const { frame } = this;
 		this.still = [
-			...bayShape(habitat, deck.index, frame),
+			...bayShapes(habitat, frame),
 			...elementShapes(habitat, frame),
 			contactShadow(frame, deck, stance.angle, stance.axial, 0.26, 0.3),
 		];
