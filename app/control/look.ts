@@ -1,7 +1,9 @@
 import type { Look, View } from "../../src/shape/drop-picture.ts";
 
-const FOV_LEAST = (20 * Math.PI) / 180;
-const FOV_MOST = (110 * Math.PI) / 180;
+/** Bounds of the vertical field of view, degrees. */
+export const FOV_DEG = { least: 20, most: 110 } as const;
+const FOV_LEAST = (FOV_DEG.least * Math.PI) / 180;
+const FOV_MOST = (FOV_DEG.most * Math.PI) / 180;
 const STEEPEST = (85 * Math.PI) / 180;
 const NEAREST = 0.6;
 const FARTHEST = 60;

@@ -26,11 +26,15 @@ interface Box {
 
 const MARGIN = 12;
 const EDGE = 6;
+const ARROWS: readonly AnchorName[] = ["C", "K", "E"];
+/** Places along an arrow that are kept clear. */
+const SHAFT = 6;
 
 /** Puts every label beside its anchor so that none covers another, an instrument or the marks. Writes transforms only. */
 export class LabelPlacer {
 	private readonly pixel = new Float64Array(3);
-	private readonly boxes: Box[] = Array.from({ length: 40 }, () => ({ x0: 0, y0: 0, x1: 0, y1: 0 }));
+	private readonly between = new Float64Array(3);
+	private readonly boxes: Box[] = Array.from({ length: 60 }, () => ({ x0: 0, y0: 0, x1: 0, y1: 0 }));
 	private used = 0;
 
 	constructor(private readonly labels: readonly Label[]) {}
@@ -42,7 +46,20 @@ export class LabelPlacer {
 			const anchor = picture.anchors[name];
 			if (anchor.visible && this.at(picture, anchor.point, width, height)) this.takeAround(this.pixel[0] as number, this.pixel[1] as number, 13);
 		}
+		for (let i = 0; i < ARROWS.length; i++) this.keepArrow(picture, ARROWS[i] as AnchorName, width, height);
 		for (const label of this.labels) this.put(label, picture, width, height);
+	}
+
+	/** Keeps the shaft of an arrow clear. */
+	private keepArrow(picture: DropPicture, name: AnchorName, width: number, height: number): void {
+		const anchor = picture.anchors[name];
+		if (!anchor.visible) return;
+		const from = picture.arrowOrigin;
+		for (let i = 0; i < SHAFT; i++) {
+			const k = i / (SHAFT - 1);
+			for (let c = 0; c < 3; c++) this.between[c] = (from[c] as number) + k * ((anchor.point[c] as number) - (from[c] as number));
+			if (this.at(picture, this.between, width, height)) this.takeAround(this.pixel[0] as number, this.pixel[1] as number, 8);
+		}
 	}
 
 	private at(picture: DropPicture, p: Float64Array, width: number, height: number): boolean {

@@ -3,6 +3,7 @@ import { DropFigure } from "../../src/shape/drop-figure.ts";
 import { DropPicture } from "../../src/shape/drop-picture.ts";
 import { DropStage } from "../../src/shape/drop-stage.ts";
 import type { Stars } from "../../src/shape/drawable.ts";
+import { FieldOfView } from "../control/FieldOfView.tsx";
 import { listenKeys } from "../control/keys.ts";
 import { currentLook, lookFor, onLook } from "../control/look.ts";
 import { listenPointer } from "../control/pointer.ts";
@@ -84,6 +85,7 @@ export function Stage() {
 		<div ref={host} className="picture" role="application" tabIndex={0} aria-label={stageName(shown, view)} data-picture={canvas.kind}>
 			{canvas.element}
 			{shown && picture && <Labels shown={shown} picture={picture} onPlacer={take} />}
+			{picture && <FieldOfView view={view} />}
 			{canvas.lost && <p className="lost">The picture was lost by the graphics system. It comes back by itself.</p>}
 			{!picture && <p className="lost">Nothing to show: choose an activity that is built.</p>}
 		</div>

@@ -67,7 +67,8 @@ export class DropPicture {
 	private readonly rosePanel = createPanel(ROSE.width, ROSE.height);
 	private readonly plumbPanel = createPanel(PLUMB.width, PLUMB.height);
 	private readonly plumb = createPlumb();
-	private readonly origin = new Float64Array(3);
+	/** Where the arrows start, stage, m. */
+	readonly arrowOrigin = new Float64Array(3);
 	private readonly drawn = new Float64Array(3);
 	private readonly seenFrom = new Float64Array(3).fill(Number.NaN);
 	private onRose = false;
@@ -185,7 +186,7 @@ export class DropPicture {
 
 	/** The arrows: on the object in External, on the rose in Eyepoint. */
 	private setForces(view: View, width: number, height: number, room: boolean): void {
-		const { stage, camera, origin } = this;
+		const { stage, camera, arrowOrigin: origin } = this;
 		const { greatest, object } = stage;
 		let scale: number;
 		let head: number;
@@ -222,9 +223,9 @@ export class DropPicture {
 			anchor.visible = false;
 			return;
 		}
-		const o = this.origin;
+		const o = this.arrowOrigin;
 		const v = this.drawn;
-		if (this.onRose) hudDirection(this.camera, this.origin, force[0] as number, force[1] as number, force[2] as number, v);
+		if (this.onRose) hudDirection(this.camera, this.arrowOrigin, force[0] as number, force[1] as number, force[2] as number, v);
 		else v.set(force);
 		const l = Math.max(1e-9, Math.hypot(v[0] as number, v[1] as number, v[2] as number));
 		arrow.set(o[0] as number, o[1] as number, o[2] as number, (v[0] as number) / l, (v[1] as number) / l, (v[2] as number) / l, l * scale, head);
