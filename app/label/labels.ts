@@ -8,7 +8,7 @@ export interface LabelText {
 	readonly letter?: "C" | "K" | "E";
 	/** Summary key whose derivation it opens. */
 	readonly opens?: string;
-	readonly hang?: "centred" | "outward";
+	readonly hang?: "centred" | "outward" | "tip";
 	/** A second line in words: what the finding says of it. */
 	readonly verdict?: string;
 	readonly tries: readonly (readonly [number, number])[];
@@ -55,7 +55,7 @@ export function gapWords(gap: NonNullable<DropPicture["stage"]["gap"]>, print: P
 export function dropLabels(picture: DropPicture, print: Print, verdict: string | null, external: boolean): readonly LabelText[] {
 	const { gap } = picture.stage;
 	const ten = picture.minorFactor === 10 ? " ×10" : "";
-	const force = (letter: "C" | "K" | "E", text: string): LabelText => ({ anchor: letter, letter, text, look: "chip", tries: ROUND });
+	const force = (letter: "C" | "K" | "E", text: string): LabelText => ({ anchor: letter, letter, text, look: "chip", tries: ROUND, ...(external ? {} : { hang: "tip" as const }) });
 	return [
 		...(gap ? [{ anchor: "gap", text: gapWords(gap, print), look: "answer", opens: "landing_prograde_m", tries: BESIDE_GAP, ...(verdict ? { verdict } : {}) } as const] : []),
 		force("K", `K${external ? " Coriolis" : ""}${ten}`),

@@ -7,8 +7,8 @@ export interface Label {
 	readonly element: HTMLElement;
 	/** Placed first and kept clear of; smaller is sooner. */
 	readonly rank: number;
-	/** "centred": its middle on its anchor; "outward": beyond its anchor as seen from the axis cue's origin; "free": beside its anchor, where there is room. */
-	readonly hang: "centred" | "outward" | "free";
+	/** "centred": its middle on its anchor; "outward": beyond its anchor as seen from the axis cue's origin; "tip": the same as seen from where the arrows start; "free": beside its anchor, where there is room. */
+	readonly hang: "centred" | "outward" | "tip" | "free";
 	/** Places tried, best first, as (x, y) in half sizes of the element with a margin. */
 	readonly tries: readonly (readonly [number, number])[];
 	width: number;
@@ -36,6 +36,7 @@ export class LabelPlacer {
 	private readonly between = new Float64Array(3);
 	private readonly boxes: Box[] = Array.from({ length: 60 }, () => ({ x0: 0, y0: 0, x1: 0, y1: 0 }));
 	private used = 0;
+	private firstLabel = 0;
 
 	constructor(private readonly labels: readonly Label[]) {}
 
@@ -47,6 +48,7 @@ export class LabelPlacer {
 			if (anchor.visible && this.at(picture, anchor.point, width, height)) this.takeAround(this.pixel[0] as number, this.pixel[1] as number, 13);
 		}
 		for (let i = 0; i < ARROWS.length; i++) this.keepArrow(picture, ARROWS[i] as AnchorName, width, height);
+		this.firstLabel = this.used;
 		for (const label of this.labels) this.put(label, picture, width, height);
 	}
 
@@ -100,11 +102,33 @@ export class LabelPlacer {
 			this.show(label, x, y);
 			return;
 		}
-		this.at(picture, picture.anchors.axes.point, width, height);
-		const dx = x - (this.pixel[0] as number);
-		const dy = y - (this.pixel[1] as number);
-		const l = Math.max(1, Math.hypot(dx, dy));
-		this.show(label, x + (dx / l) * (label.width / 2 + 2), y + (dy / l) * (label.height / 2 + 1));
+		const tip = label.hang === "tip";
+		this.at(picture, tip ? picture.arrowOrigin : picture.anchors.axes.point, width, height);
+		const ox = this.pixel[0] as number;
+		const oy = this.pixel[1] as number;
+		const l = Math.hypot(x - ox, y - oy);
+		const ux = l > 1 ? (x - ox) / l : 0;
+		const uy = l > 1 ? (y - oy) / l : 1;
+		let reach = tip ? Math.max(l, 14) + 4 : l;
+		for (let tries = 0; tries < 8; tries++) {
+			const cx = ox + ux * (reach + label.width / 2 + 2);
+			const cy = oy + uy * (reach + label.height / 2 + 1);
+			if (!tip || this.clear(label, cx, cy)) {
+				this.show(label, cx, cy);
+				return;
+			}
+			reach += 8;
+		}
+		label.element.style.visibility = "hidden";
+	}
+
+	/** Whether a place is free of the labels that hang from other arrows. */
+	private clear(label: Label, cx: number, cy: number): boolean {
+		for (let k = this.firstLabel; k < this.used; k++) {
+			const b = this.boxes[k] as Box;
+			if (cx - label.width / 2 < b.x1 && cx + label.width / 2 > b.x0 && cy - label.height / 2 < b.y1 && cy + label.height / 2 > b.y0) return false;
+		}
+		return true;
 	}
 
 	private show(label: Label, cx: number, cy: number): void {

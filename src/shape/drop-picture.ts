@@ -36,7 +36,7 @@ export type AnchorName = (typeof ANCHORS)[number];
 
 const AXIS_NAMES = ["prograde", "up", "axial"] as const;
 /** Of the instruments, CSS px. */
-const AXIS = { width: 148, height: 106, arm: 30, margin: 14, small: { width: 112, height: 84, arm: 22 } } as const;
+const AXIS = { width: 144, height: 100, arm: 29, margin: 14, small: { width: 112, height: 84, arm: 22 } } as const;
 const ROSE = { width: 168, height: 178, arm: 62, margin: 14 } as const;
 const PLUMB = { width: 104, height: 178, long: 84 } as const;
 /** A picture narrower or lower than this has no room for rose and plumb. */
@@ -236,7 +236,7 @@ export class DropPicture {
 	private setInstruments(view: View, width: number, height: number, room: boolean): void {
 		const { camera, anchors, stage } = this;
 		const cue = width < ROOM.width ? AXIS.small : AXIS;
-		const axisX = width - AXIS.margin - cue.width / 2;
+		const axisX = AXIS.margin + cue.width / 2;
 		const axisY = AXIS.margin + cue.height / 2;
 		this.axisPanel.set(camera, width, height, axisX, axisY, cue.width / AXIS.width, cue.height / AXIS.height);
 		this.axes.set(camera, width, height, axisX, axisY + 4, cue.arm);

@@ -144,9 +144,9 @@ export class DropStage {
 		this.force(this.forces.centrifugal, 0);
 		this.force(this.forces.coriolis, 2);
 		this.force(this.forces.euler, 4);
-		this.showTrail(shown);
-		this.showGhost(shown);
 		this.hasLanded = shown >= drop.flight.end - 1e-9;
+		this.showTrail(shown);
+		this.showGhost(this.hasLanded ? Number.MAX_VALUE : shown);
 		this.ghostHasLanded = drop.ghost.end !== null && (shown >= drop.ghost.end || this.hasLanded);
 		setVisible(this.landed, this.hasLanded);
 		setVisible(this.ghostLanded, this.ghostHasLanded);

@@ -39,12 +39,16 @@ export interface Loft {
 	readonly turn?: readonly [aboutX: number, aboutZ: number];
 	/** Nothing lies below this y: a sole. */
 	readonly floor?: number;
+	/** Without an ink edge of its own. Default false. */
+	readonly plain?: boolean;
 }
 
 export interface Skin {
 	readonly position: number[];
 	readonly colour: number[];
 	readonly index: number[];
+	/** 1 a vertex that the ink hull stands out from, else 0. */
+	readonly inked: number[];
 }
 
 const COLUMNS = 8;
@@ -124,6 +128,7 @@ export function addLoft(skin: Skin, loft: Loft, stature: number, left: boolean):
 		}
 		if (loft.floor !== undefined) y = Math.max(y, loft.floor);
 		skin.position.push(x * scale, y * scale, (left ? -z : z) * scale);
+		skin.inked.push(loft.plain === true ? 0 : 1);
 		skin.colour.push(loft.paint?.(at, angle) ?? colourAt(at));
 	};
 	for (const [at, f, b, o, i, power, toFront, toOuter] of list as [number, number, number, number, number, number, number, number][]) {

@@ -39,13 +39,14 @@ const pelvis: Loft = {
 
 const abdomen: Loft = {
 	along: "up",
-	rows: from(-12, 588, [
+	rows: from(-6, 588, [
 		[572, 42, 34, 64],
 		[590, 50, 42.5, 74],
 		[604, 53, 45, 75.5],
 		[622, 55, 45.5, 75],
 		[645, 58, 51, 78],
-		[668, 57, 53, 77],
+		[668, 58, 53.5, 77],
+		[684, 54, 50, 70],
 	]),
 	between: 1,
 	around: 20,
@@ -56,9 +57,9 @@ const abdomen: Loft = {
 
 const thorax: Loft = {
 	along: "up",
-	rows: from(-8, 660, [
-		[638, 44, 36, 62],
-		[657, 57.5, 52.5, 78],
+	rows: from(-2, 660, [
+		[632, 46, 38, 62],
+		[662, 59.5, 55, 79.5],
 		[698, 65, 66, 86],
 		[735, 66, 73, 90, 2.4],
 		[770, 63, 77, 91, 2.4],
@@ -140,21 +141,21 @@ const collar: Loft = {
 	along: "right",
 	rows: [
 		[20, 10, 76, 24, 34],
-		[42, 10, 73, 25, 38],
-		[62, 8, 63, 24, 36],
-		[85, 6, 53, 22.5, 30],
+		[42, 10, 73, 26, 38],
+		[62, 8, 63, 23, 36],
+		[85, 5, 51, 17.5, 28],
 	],
 	between: 1,
 	around: 12,
 	capFirst: null,
-	capLast: [15, 3],
+	capLast: [15, 2],
 	colour: [[-100, suitDark]],
 };
 
 const upperArm: Loft = {
 	along: "up",
 	rows: [
-		[0, 24, 25, 25, 25],
+		[0, 22.5, 23, 24, 24],
 		[-24, 29.5, 30.5, 28, 25],
 		[-50, 30, 31, 28, 24.5],
 		[-80, 29, 28, 25, 24],
@@ -164,8 +165,8 @@ const upperArm: Loft = {
 	],
 	between: 1,
 	around: 12,
-	capFirst: [22, 3],
-	capLast: [24, 3],
+	capFirst: [19, 3],
+	capLast: [24, 2],
 	colour: [
 		[100, suitDark],
 		[-50, suit],
@@ -205,7 +206,7 @@ const palm: Loft = {
 		[-55, 22.5, 22, 7.5, 8.5],
 	],
 	between: 1,
-	around: 12,
+	around: 10,
 	capFirst: null,
 	capLast: [5, 2],
 	colour: [[100, skin]],
@@ -238,8 +239,7 @@ const fingertips: Loft[] = FINGERS.map(([x, , r, long]) => ({
 	along: "up",
 	rows: [
 		[0, r, r, r, r],
-		[-long * 0.5, r * 0.92, r * 0.92, r * 0.9, r * 0.95],
-		[-long * 0.8, r * 0.85, r * 0.85, r * 0.8, r * 0.85, 2.2, 0, -long * 0.09],
+		[-long * 0.6, r * 0.9, r * 0.9, r * 0.87, r * 0.92, 2.2, 0, -long * 0.05],
 		[-long + r * 0.6, r * 0.7, r * 0.7, r * 0.6, r * 0.65, 2.2, 0, -long * 0.16],
 	],
 	between: 1,
@@ -304,8 +304,8 @@ const thigh: Loft = {
 const shank: Loft = {
 	along: "up",
 	rows: [
-		[0, 29, 29, 28, 28],
-		[-24, 31, 33, 31, 30.5],
+		[0, 30.5, 30.5, 29.3, 29.3],
+		[-22, 31, 33, 31, 30.5],
 		[-41, 29, 36, 31.8, 31],
 		[-62, 27, 39, 32.5, 31.5],
 		[-90, 25, 38, 31, 31],
@@ -313,9 +313,9 @@ const shank: Loft = {
 		[-137, 23.2, 30, 26, 26],
 		[-138, 26, 33, 28.5, 28.5],
 		[-152, 25.5, 31.5, 28, 28],
-		[-192, 24, 26, 24, 24],
-		[-225, 26, 27, 24, 23],
-		[-246, 28, 29, 24.5, 23.5],
+		[-192, 24.5, 27, 24, 24],
+		[-222, 27.5, 30.5, 24.5, 23.5],
+		[-246, 32, 33, 25, 24],
 	],
 	between: 1,
 	around: 12,
@@ -325,40 +325,43 @@ const shank: Loft = {
 		[100, suit],
 		[-138, boot],
 	],
-	paint: (at, angle) => (at > -40 && angle < KNEE ? suitDark : null),
+	paint: (at, angle) => (at < 3 && at > -40 && angle < KNEE ? suitDark : null),
 };
 
 /** A slab under the boot, level with the floor. */
 const sole = (rows: readonly (readonly [at: number, outer: number, inner: number])[], level: number, toe: number): Loft => ({
 	along: "forward",
-	rows: rows.map(([at, outer, inner]) => [at, 3, 3, outer, inner, 5, level + 3]),
+	rows: rows.map(([at, outer, inner]) => [at, 3, 3, outer, inner, 4, level + 3]),
 	between: 1,
 	around: 8,
-	capFirst: [3, 1],
+	capFirst: [4, 2],
 	capLast: [toe, 2],
 	colour: [[-100, coaming]],
+	plain: true,
 });
 const foot: Loft = {
 	along: "forward",
 	rows: [
-		[-37, 23, 23, 18, 18, 2.4, -15],
-		[-22, 30, 30, 23, 22, 2.4, -10],
-		[2, 34, 34, 25, 24, 2.3, -6],
-		[26, 28.5, 28.5, 27.5, 26.5, 2.4, -12.5],
-		[50, 22, 22, 30, 28.5, 2.5, -18.5],
-		[74, 17.5, 17.5, 31, 29, 2.5, -23],
+		[-35, 25, 25, 18, 18, 2.4, -14],
+		[-20, 31, 31, 23.5, 22.5, 2.4, -9],
+		[4, 35, 35, 25.5, 24.5, 2.3, -5],
+		[28, 29.5, 29.5, 27.5, 26.5, 2.4, -11],
+		[51, 22.5, 22.5, 30, 28.5, 2.5, -18],
+		[62, 20, 20, 30.6, 28.8, 2.5, -20.5],
+		[74, 14.5, 14.5, 27, 25, 2.5, -23.5],
+		[82, 9, 9, 20, 18, 2.5, -25],
 	],
 	between: 1,
-	around: 12,
-	capFirst: [6, 2],
-	capLast: [8, 1],
+	around: 10,
+	capFirst: [5, 2],
+	capLast: [4, 1],
 	colour: [[-100, boot]],
 	floor: -36,
 };
 const footSole = sole(
 	[
-		[-40, 15, 15],
-		[-30, 22, 21.5],
+		[-34, 16, 16],
+		[-26, 22.5, 22],
 		[0, 25.5, 24],
 		[40, 29.5, 27.5],
 		[78, 31.5, 29.5],
@@ -370,13 +373,14 @@ const footSole = sole(
 const toes: Loft = {
 	along: "forward",
 	rows: [
-		[-8, 13, 13, 26, 24, 2.5, 2],
-		[4, 18, 18, 31.5, 29.5, 2.5, 4.2],
+		[-26, 13, 13, 24, 22, 2.5, 3],
+		[-7, 18, 18, 31, 29.2, 2.5, 4.3],
+		[6, 17, 17, 31, 29, 2.5, 3.6],
 		[18, 16, 16, 30, 27, 2.5, 2.2],
 		[32, 12, 12, 22.5, 18.5, 2.4, -1],
 	],
 	between: 1,
-	around: 12,
+	around: 10,
 	capFirst: null,
 	capLast: [10, 2],
 	colour: [[-100, boot]],
