@@ -43,7 +43,11 @@ test("standard input and the exit status go through", async () => {
 
 test("npm start serves the app", async () => {
 	const child = spawn("npm", ["-s", "start"], { cwd: clone, env: clean, stdio: ["ignore", "pipe", "inherit"], detached: true });
-	const line = await new Promise<string>((resolve) => child.stdout.setEncoding("utf8").on("data", resolve));
+	const line = await new Promise<string>((resolve, reject) => {
+		child.stdout.setEncoding("utf8").on("data", resolve);
+		child.on("exit", (status) => reject(new Error(`npm start ended with status ${status}`)));
+	});
+	child.removeAllListeners("exit");
 	const page = await fetch(/http:\S+/.exec(line)?.[0] ?? "");
 	const text = await page.text();
 	if (child.pid !== undefined) process.kill(-child.pid);
