@@ -1,6 +1,8 @@
 import { sha256 as hash } from "@noble/hashes/sha2.js";
 import { bytesToHex, utf8ToBytes } from "@noble/hashes/utils.js";
 import * as z from "zod/mini";
+import { explain } from "./explain.ts";
+import { problemLine } from "./problem.ts";
 import { type LayoutFile, layoutSchema } from "./schema.ts";
 
 /** What is opened out over several lines, and the lists with one entry a line; all else stands on one line. */
@@ -11,7 +13,12 @@ const LISTS: ReadonlySet<string> = new Set(["habitat.decks", "elements", "crew",
  * The one way to write a layout: keys in the schema's order, two spaces, one element, activity, deck or crew member a
  * line, numbers as the shortest text that reads back the same. Throws on a value that is no layout.
  */
-export const writeLayout = (layout: LayoutFile): string => `${write(z.parse(layoutSchema, layout), "", "")}\n`;
+export function writeLayout(layout: LayoutFile): string {
+	const ordered = z.safeParse(layoutSchema, layout);
+	if (ordered.success) return `${write(ordered.data, "", "")}\n`;
+	const [problem] = explain(layoutSchema, layout, new Set());
+	throw new TypeError(`not a layout: ${problem ? problemLine(problem) : ordered.error.message}`);
+}
 
 function write(value: unknown, path: string, indent: string): string {
 	const deeper = `${indent}  `;

@@ -9,7 +9,7 @@ const shipped = readdirSync("assets/layout")
 	.filter((f) => f.endsWith(".layout.json"))
 	.map((file) => ({ file, text: readFileSync(`assets/layout/${file}`, "utf8") }));
 
-const STRUCTURES_EACH = 14_000;
+const STRUCTURES_EACH = 13_500;
 const BYTES_EACH = 1_800;
 /** Far above what one parse takes on a slow and busy machine. */
 const HANG_MS = 2_000;
@@ -53,7 +53,7 @@ function judge(make: () => ParseResult, source: () => string): boolean {
 }
 
 describe.each(shipped.map((s, i) => ({ ...s, seed: 20_261 + i })))("$file, seed $seed", ({ text, seed }) => {
-	test(`${STRUCTURES_EACH} damaged structures are read whole or refused with reasons`, { timeout: 120_000 }, () => {
+	test(`${STRUCTURES_EACH} damaged structures are read whole or refused with reasons`, { timeout: 300_000 }, () => {
 		const random = seeded(seed);
 		let whole = 0;
 		for (let i = 0; i < STRUCTURES_EACH; i++) {
@@ -70,7 +70,7 @@ describe.each(shipped.map((s, i) => ({ ...s, seed: 20_261 + i })))("$file, seed 
 		expect(whole).toBeLessThan(STRUCTURES_EACH / 2);
 	});
 
-	test(`${BYTES_EACH} damaged byte sequences likewise`, { timeout: 60_000 }, () => {
+	test(`${BYTES_EACH} damaged byte sequences likewise`, { timeout: 120_000 }, () => {
 		const random = seeded(seed + 1000);
 		const bytes = new TextEncoder().encode(text);
 		let refused = 0;

@@ -15,10 +15,12 @@ interface Context {
 	readonly windows: Known;
 }
 
-/** The ids that may be of elements of a kind: those of other kinds are out, those of entries that cannot be read are in. */
+/** The ids that may be of elements of a kind: those only of other kinds are out, those of entries that cannot be read are in. */
 function elementsOf({ elements }: LayoutParts, kind: ElementFile["kind"]): Known {
-	const others = new Set(elements.entries.filter((e) => e.value.kind !== kind).map((e) => e.value.id));
-	return { present: elements.present, known: new Set([...elements.known].filter((id) => !others.has(id))) };
+	const known = new Set(elements.known);
+	for (const { value } of elements.entries) if (value.kind !== kind) known.delete(value.id);
+	for (const { value } of elements.entries) if (value.kind === kind) known.add(value.id);
+	return { present: elements.present, known };
 }
 
 const named = ({ parts }: Context, path: string, deck: string): Problems =>
