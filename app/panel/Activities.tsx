@@ -5,7 +5,7 @@ import { dropTrace } from "../store/motion.ts";
 import { lastMoment, selectActivity, selectCase, useSelectedCase, worstCase } from "../store/navigate.ts";
 import { phaseRate } from "./levels.ts";
 import { type Printer, usePrinter } from "./print.ts";
-import { detailOf, KIND_WORDS, nameOf } from "./words.ts";
+import { detailOf, nameOf } from "./words.ts";
 
 /** A card for each activity that is built, with its motion in small; the others are named, and that is all. */
 export function Activities() {
@@ -35,7 +35,7 @@ export function Activities() {
 			{selected && <CaseSelectors selected={selected} all={cases.filter((c) => c.id === selected.id)} print={print} />}
 			{unbuilt.length > 0 && (
 				<p className="unbuilt">
-					<span>Not built yet:</span> {unbuilt.map((c) => `${nameOf(c.id)} (${KIND_WORDS[c.kind]})`).join(", ")}.
+					<span>Not built yet:</span> {unbuilt.map((c) => nameOf(c.id)).join(", ")}.
 				</p>
 			)}
 		</section>

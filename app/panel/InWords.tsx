@@ -48,14 +48,22 @@ function momentWords(c: AssessedCase, time: number, print: Printer): string {
 
 const REST_MS = 400;
 
-/** The time, once it has stood still for a moment. */
+/** The time, once it has stood still for a moment: one timer, however often the clock moves. */
 function useRestingTime(): number {
 	const [time, setTime] = useState(0);
 	useEffect(() => {
 		let timer: ReturnType<typeof setTimeout> | undefined;
+		let changed = 0;
+		let now = 0;
+		const look = (): void => {
+			const rested = performance.now() - changed;
+			timer = rested < REST_MS ? setTimeout(look, REST_MS - rested) : undefined;
+			if (timer === undefined) setTime(now);
+		};
 		const stop = onTime((t) => {
-			clearTimeout(timer);
-			timer = setTimeout(() => setTime(t), REST_MS);
+			now = t;
+			changed = performance.now();
+			timer ??= setTimeout(look, REST_MS);
 		});
 		return () => {
 			clearTimeout(timer);

@@ -1,6 +1,6 @@
-import { change, useDocument } from "../store/document.ts";
+import { change, endGesture, useDocument } from "../store/document.ts";
 import { useSelectedCase } from "../store/navigate.ts";
-import { changeOf, dragChange, inputsOf } from "./inputs.ts";
+import { dragChange, inputsOf } from "./inputs.ts";
 import { NumberField } from "./NumberField.tsx";
 
 /** What goes in: the numbers of the case on the stage, each an undoable edit of the layout. */
@@ -21,7 +21,8 @@ export function Inputs() {
 							value={input.value}
 							range={input.range}
 							step={input.step}
-							commit={(value) => change(changeOf(input, value))}
+							commit={(value, running) => change(input.change(value), running ? input.key : undefined)}
+							rest={endGesture}
 						/>
 					))}
 					{group.title === "Object" && c.file.kind === "drop" && <DragSwitch id={c.id} drag={c.file.drag} />}
@@ -37,7 +38,7 @@ function DragSwitch({ id, drag }: { readonly id: string; readonly drag: boolean 
 			<label>
 				<span className="name">Air drag</span>
 				<span className="tick">
-					<input type="checkbox" checked={drag} onChange={(e) => change(dragChange(id, e.target.checked))} />
+					<input type="checkbox" checked={drag} onChange={(e) => change(dragChange(useDocument.getState().layout, id, e.target.checked))} />
 					<span>{drag ? "on" : "off"}</span>
 				</span>
 			</label>

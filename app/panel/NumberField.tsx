@@ -15,21 +15,23 @@ export interface NumberFieldProps {
 	readonly range: Quantity;
 	/** One arrow press, in the file's unit; in another unit it is the round step next to it. */
 	readonly step: number;
-	/** Takes a value in the file's unit; returns what forbids it. */
-	readonly commit: (value: number) => readonly Problem[];
+	/** Takes a value in the file's unit; returns what forbids it. Values of arrow and Page keys come one after another until `rest`. */
+	readonly commit: (value: number, running: boolean) => readonly Problem[];
+	/** The keys are at rest: the field was left. */
+	readonly rest?: () => void;
 }
 
 const STEPS: Readonly<Record<string, number>> = { ArrowUp: 1, ArrowDown: -1, PageUp: 10, PageDown: -10 };
 
 /** A number with its unit: arrows one step, Page keys ten, any unit typed, Esc puts it back. A value that is refused stays in sight with its reason. */
-export function NumberField({ label, value, range, step, commit }: NumberFieldProps) {
+export function NumberField({ label, value, range, step, commit, rest }: NumberFieldProps) {
 	const system = useSession((s) => s.units);
 	const [draft, setDraft] = useState<string | null>(null);
 	const [fault, setFault] = useState<string | null>(null);
 	const id = useId();
 	const own = unitNamed(range.unit) ?? unitOf("1");
 	const shown = unitIn(system, own);
-	const toShown = (v: number): number => (shown === own ? v : Number(convertUnit(v, own, shown).toPrecision(6)));
+	const toShown = (v: number): number => (shown === own ? v : Number(convertUnit(v, own, shown).toPrecision(5)));
 	const print = (v: number): string => withUnit(printExact(toShown(v)), shown.symbol);
 
 	const text = printExact(toShown(value));
@@ -39,15 +41,15 @@ export function NumberField({ label, value, range, step, commit }: NumberFieldPr
 		setDraft(null);
 		setFault(null);
 	}
-	const take = (v: number): void => {
+	const take = (v: number, running: boolean): void => {
 		const next = written(v);
-		const reason = refusal(next, next === value ? [] : undefined);
+		const reason = refusal(next, running);
 		setFault(reason);
 		setDraft(reason === null ? null : printExact(toShown(next)));
 	};
-	const refusal = (next: number, known: readonly Problem[] | undefined): string | null => {
+	const refusal = (next: number, running: boolean): string | null => {
 		if (!inRange(next, range)) return `${label}: ${print(next)} is outside ${rangeText(range, print)}.`;
-		const problems = known ?? commit(next);
+		const problems = next === value ? [] : commit(next, running);
 		return problems.length === 0 ? null : problems.map((p) => `${label}: ${p.path} would be ${p.value}, expected ${p.expected}.`).join(" ");
 	};
 	/** What stands in the field, in the file's unit; null where it cannot be read. */
@@ -60,14 +62,14 @@ export function NumberField({ label, value, range, step, commit }: NumberFieldPr
 	};
 	const finish = (): void => {
 		const v = read();
-		if (v !== null) take(v);
+		if (v !== null) take(v, false);
 	};
 	const nudge = (steps: number): void => {
 		const from = read();
 		if (from === null) return;
 		const one = shown === own ? step : roundStep(step * (own.factor / shown.factor));
 		const next = convertUnit(Number((convertUnit(from, own, shown) + steps * one).toPrecision(12)), shown, own);
-		take(Math.min(Math.max(next, range.min), range.max));
+		take(Math.min(Math.max(next, range.min), range.max), true);
 	};
 	const onKeyDown = (e: KeyboardEvent<HTMLInputElement>): void => {
 		if (e.ctrlKey || e.metaKey || e.altKey) return;
@@ -100,7 +102,10 @@ export function NumberField({ label, value, range, step, commit }: NumberFieldPr
 						value={draft ?? text}
 						onChange={(e) => setDraft(e.target.value)}
 						onFocus={(e) => e.target.select()}
-						onBlur={() => draft !== null && finish()}
+						onBlur={() => {
+							if (draft !== null) finish();
+							rest?.();
+						}}
 						onKeyDown={onKeyDown}
 					/>
 					<span className="unit">{shown.symbol === "1" ? "" : shown.symbol}</span>

@@ -7,7 +7,7 @@ import { onTime, setTime, transient } from "../store/transient.ts";
 import type { Printer } from "./print.ts";
 import { useWidth } from "./useWidth.ts";
 
-const INSET = { top: 8, right: 10, bottom: 4, left: 34 };
+const INSET = { top: 8, right: 10, bottom: 4, left: 46 };
 const HEIGHT = 80;
 /** Room for the times, under the last plot only. */
 const TIMES = 14;

@@ -1,4 +1,4 @@
-import { type DBSchema, type IDBPDatabase, openDB } from "idb";
+import type { DBSchema, IDBPDatabase } from "idb";
 import { writeLayout } from "../store/core.ts";
 import { type DocumentState, isDirty, useDocument } from "../store/document.ts";
 import { say } from "../store/session.ts";
@@ -23,11 +23,13 @@ const PAUSE_MS = 800;
 
 let opening: Promise<IDBPDatabase<Schema>> | undefined;
 const database = (): Promise<IDBPDatabase<Schema>> => {
-	opening ??= openDB<Schema>("offplumb", 1, {
-		upgrade: (db) => {
-			db.createObjectStore("copies", { keyPath: "id" }).createIndex("at", "at");
-		},
-	});
+	opening ??= import("idb").then(({ openDB }) =>
+		openDB<Schema>("offplumb", 1, {
+			upgrade: (db) => {
+				db.createObjectStore("copies", { keyPath: "id" }).createIndex("at", "at");
+			},
+		}),
+	);
 	return opening;
 };
 

@@ -1,9 +1,9 @@
-import { type FileWithHandle, fileOpen, fileSave } from "browser-fs-access";
+import type { FileWithHandle } from "browser-fs-access";
 import { decodeLayout } from "../../src/layout/parse.ts";
 import { problemLine } from "../../src/layout/problem.ts";
 import { newLayout, type Problem, parseLayout, writeLayout } from "../store/core.ts";
 import { type FileRef, markSaved, openDocument, refuseFile, useDocument } from "../store/document.ts";
-import { say } from "../store/session.ts";
+import { say, useSession } from "../store/session.ts";
 import { newDocumentId } from "./autosave.ts";
 
 const EXTENSION = ".layout.json";
@@ -25,6 +25,7 @@ export function openText(text: string, file: FileRef | null): readonly Problem[]
 	if (!result.ok) return result.problems;
 	const replaced = useDocument.getState();
 	openDocument(result.layout, file, newDocumentId());
+	useSession.setState({ notice: null });
 	if (replaced !== undefined && replaced.layout !== replaced.saved)
 		say(`“${replaced.layout.title}” had unsaved changes: it is kept.`, "recover");
 	return [];
@@ -37,6 +38,7 @@ export function openNew(): void {
 
 export async function pickFile(): Promise<void> {
 	try {
+		const { fileOpen } = await import("browser-fs-access");
 		await openFile(await fileOpen(DIALOG));
 	} catch (error) {
 		if (!cancelled(error)) say(`The file could not be read: ${reasonOf(error)}`);
@@ -60,6 +62,7 @@ export async function saveFile(anew: boolean): Promise<void> {
 	const blob = new Blob([writeLayout(layout)], { type: "application/json" });
 	const name = file?.name ?? fileNameFor(layout.title);
 	try {
+		const { fileSave } = await import("browser-fs-access");
 		const handle = await fileSave(blob, { ...DIALOG, fileName: name }, anew ? null : (file?.handle ?? null));
 		markSaved(layout, { name: handle?.name ?? name, handle: handle ?? null });
 		say(handle ? `Saved to ${handle.name}.` : `Saved as ${name} among the downloads.`);

@@ -6,6 +6,7 @@ import type { LayoutFile } from "../../src/layout/schema.ts";
 export { FORMULAS, type Formula } from "../../src/activity/formula.ts";
 export type { Derivation, SummaryValue } from "../../src/activity/result.ts";
 export type { Finding } from "../../src/criteria/row.ts";
+export type { Change } from "../../src/history/edit.ts";
 export { writeLayout } from "../../src/layout/canonical.ts";
 export { newLayout } from "../../src/layout/new.ts";
 export { parseLayout } from "../../src/layout/parse.ts";
@@ -22,4 +23,3 @@ export const assessLayout = (layout: LayoutFile): Assessed => assess(layout, SHI
 
 /** The layout that is open when none was asked for. */
 export const DEMO: string = demo;
-export { type Change, edit, type History, redo, startHistory, undo } from "./history-interim.ts";

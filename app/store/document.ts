@@ -1,16 +1,7 @@
 import { create } from "zustand";
-import {
-	type Assessed,
-	assessLayout,
-	type Change,
-	edit,
-	type History,
-	type LayoutFile,
-	type Problem,
-	redo,
-	startHistory,
-	undo,
-} from "./core.ts";
+import { begin, change as changeHistory, commit, type History, redo, startHistory, undo } from "../../src/history/history.ts";
+import { share } from "../../src/history/share.ts";
+import { type Assessed, assessLayout, type Change, type LayoutFile, type Problem } from "./core.ts";
 
 /** The file a layout came from or was saved to; the handle where the browser can write back. */
 export interface FileRef {
@@ -26,8 +17,10 @@ export interface DocumentState {
 	readonly layout: LayoutFile;
 	readonly assessed: Assessed;
 	readonly file: FileRef | null;
-	/** The layout as last opened or saved: the document is dirty while it is another. */
+	/** The layout as last opened or saved. */
 	readonly saved: LayoutFile;
+	/** Whether the layout differs from the saved one. */
+	readonly dirty: boolean;
 	/** A file that was refused, while the document stays. */
 	readonly refused: { readonly name: string; readonly problems: readonly Problem[] } | null;
 }
@@ -39,6 +32,7 @@ const opened = (layout: LayoutFile, file: FileRef | null, id: string): DocumentS
 	assessed: assessLayout(layout),
 	file,
 	saved: layout,
+	dirty: false,
 	refused: null,
 });
 
@@ -51,18 +45,34 @@ export const openDocument = (layout: LayoutFile, file: FileRef | null, id: strin
 export const refuseFile = (name: string, problems: readonly Problem[]): void => useDocument.setState({ refused: { name, problems } });
 export const dismissRefused = (): void => useDocument.setState({ refused: null });
 
-const adopt = (history: History): void => useDocument.setState({ history, layout: history.layout, assessed: assessLayout(history.layout) });
+function adopt(history: History): void {
+	const { history: before, layout, saved } = useDocument.getState();
+	const next = history.document;
+	if (history === before) return;
+	useDocument.setState(
+		next === layout ? { history } : { history, layout: next, assessed: assessLayout(next), dirty: share(saved, next) !== saved },
+	);
+}
 
-/** The one way the app changes a layout. Returns what forbids it, or an empty list where it was done. */
-export function change(c: Change): readonly Problem[] {
-	const result = edit(useDocument.getState().history, c);
+/**
+ * The one way the app changes a layout; returns what forbids it, or an empty list where it was done. Changes of one
+ * gesture in a row (a held key) make one step.
+ */
+export function change(what: Change, gesture?: string): readonly Problem[] {
+	const { history } = useDocument.getState();
+	const result = changeHistory(gesture === undefined ? commit(history) : begin(history, gesture, what.label), what);
 	if (!result.ok) return result.problems;
 	adopt(result.history);
 	return [];
 }
 
+/** Ends a gesture: what follows is another step. */
+export const endGesture = (): void => adopt(commit(useDocument.getState().history));
 export const undoChange = (): void => adopt(undo(useDocument.getState().history));
 export const redoChange = (): void => adopt(redo(useDocument.getState().history));
-export const markSaved = (layout: LayoutFile, file: FileRef | null): void => useDocument.setState({ saved: layout, file });
 
-export const isDirty = (s: DocumentState): boolean => s.layout !== s.saved;
+/** A layout was written to a file; the document may have moved on meanwhile. */
+export const markSaved = (layout: LayoutFile, file: FileRef | null): void =>
+	useDocument.setState((s) => ({ saved: layout, file, dirty: share(layout, s.layout) !== layout }));
+
+export const isDirty = (s: DocumentState): boolean => s.dirty;

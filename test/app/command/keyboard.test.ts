@@ -66,7 +66,7 @@ describe("commands", () => {
 		expect(keysOf(commandNamed("commands"), { commands: "c" })).toEqual(["Mod+K", "c"]);
 	});
 	test("undo is heard everywhere but in a field, which has its own", () => {
-		change({ label: "rename", apply: (l) => ({ ...l, title: "Other" }) });
+		change({ label: "Set title", kind: "set", path: ["title"], value: "Other" });
 		expect(press("input", "z", { ctrlKey: true }).defaultPrevented).toBe(false);
 		expect(useDocument.getState().layout.title).toBe("Other");
 		press("button", "z", { ctrlKey: true });
@@ -105,9 +105,9 @@ describe("commands", () => {
 		expect(session().dialog).toBe("glossary");
 	});
 	test("undo and redo name what they would do", () => {
-		change({ label: "rename", apply: (l) => ({ ...l, title: "Other" }) });
-		expect(commandNamed("undo").name()).toBe("Undo rename");
+		change({ label: "Set title", kind: "set", path: ["title"], value: "Other" });
+		expect(commandNamed("undo").name()).toBe("Undo set title");
 		commandNamed("undo").run();
-		expect(commandNamed("redo").name()).toBe("Redo rename");
+		expect(commandNamed("redo").name()).toBe("Redo set title");
 	});
 });

@@ -1,8 +1,9 @@
 import { beforeEach, describe, expect, test } from "vitest";
-import { changeOf, dragChange, type Input, inputsOf } from "../../../app/panel/inputs.ts";
+import { dragChange, type Input, inputsOf } from "../../../app/panel/inputs.ts";
 import { change, undoChange, useDocument } from "../../../app/store/document.ts";
 import { findCase } from "../../../app/store/navigate.ts";
 import { useSession } from "../../../app/store/session.ts";
+import { undoLabel } from "../../../src/history/history.ts";
 import { startDemo } from "../../support/demo.ts";
 
 const doc = useDocument.getState;
@@ -17,7 +18,7 @@ const input = (label: string): Input => {
 	if (!found) throw new RangeError(`no input "${label}" among ${inputs().map((i) => i.label)}`);
 	return found;
 };
-const set = (label: string, value: number) => change(changeOf(input(label), value));
+const set = (label: string, value: number) => change(input(label).change(value));
 const drop = () => {
 	const { file } = shown();
 	if (file.kind !== "drop") throw new Error("no drop is on the stage");
@@ -44,7 +45,7 @@ describe("inputs of a drop", () => {
 		const before = doc().layout;
 		expect(set(label, value)).toEqual([]);
 		expect(input(label).value).toBe(value);
-		expect(doc().history.undoLabel).toMatch(/^set /);
+		expect(undoLabel(doc().history)).toMatch(/^Undo set /);
 		undoChange();
 		expect(doc().layout).toEqual(before);
 	});
@@ -52,7 +53,7 @@ describe("inputs of a drop", () => {
 		expect(set("Deck radius", 35)).toEqual([]);
 		const ladder = doc().layout.elements?.find((e) => e.kind === "ladder");
 		expect(ladder?.kind === "ladder" && ladder.foot_radius_m).toBe(35);
-		expect(doc().history.undoLabel).toBe("set radius of the Cargo deck");
+		expect(undoLabel(doc().history)).toBe("Undo set radius of the Cargo deck");
 	});
 	test("heading and elevation appear with a speed, and a speed of 0 is a drop again", () => {
 		expect(inputs().map((i) => i.label)).not.toContain("Heading");
@@ -65,7 +66,7 @@ describe("inputs of a drop", () => {
 	});
 	test("the drag coefficient appears with the drag", () => {
 		expect(inputs().map((i) => i.label)).not.toContain("Drag coefficient");
-		expect(change(dragChange("drop-driver", true))).toEqual([]);
+		expect(change(dragChange(doc().layout, "drop-driver", true))).toEqual([]);
 		expect(drop().drag).toBe(true);
 		expect(set("Drag coefficient", 1.1)).toEqual([]);
 		expect(drop().object.drag_coefficient).toBe(1.1);

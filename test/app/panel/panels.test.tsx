@@ -28,7 +28,7 @@ describe("activities", () => {
 		const cards = [...host.querySelectorAll("button.card")];
 		expect(cards.map((c) => textOf(c.querySelector("strong")))).toEqual(["Drop driver", "Toss pouch"]);
 		expect(cards.every((c) => c.querySelector("svg path")?.getAttribute("d")?.startsWith("M"))).toBe(true);
-		expect(textOf(host.querySelector(".unbuilt"))).toMatch(/^Not built yet: .*Climb a \(climb\)/);
+		expect(textOf(host.querySelector(".unbuilt"))).toMatch(/^Not built yet: .*Climb a,/);
 		expect(host.querySelectorAll(".unbuilt button, .unbuilt a")).toHaveLength(0);
 	});
 	test("choosing a card puts its worst case on the stage", () => {
@@ -196,7 +196,7 @@ describe("header, words and refusals", () => {
 		const host = draw(<Header />);
 		expect(textOf(host.querySelector(".levels"))).toBe("3.60 rpm nominal0.493 g Cargo deck0.452 g Crew deck");
 		expect(document.title).toBe("Larkspur cargo ring, segment C – Offplumb");
-		act(() => void change({ label: "rename", apply: (l) => ({ ...l, title: "Other" }) }));
+		act(() => void change({ label: "Set title", kind: "set", path: ["title"], value: "Other" }));
 		expect(document.title).toBe("• Other – Offplumb");
 	});
 	test("the picture's facts stand as text", () => {

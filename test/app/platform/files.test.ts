@@ -32,7 +32,7 @@ describe("files", () => {
 		expect(doc().layout).toBe(layout);
 	});
 	test("opening over unsaved work says that it is kept", () => {
-		change({ label: "rename", apply: (l) => ({ ...l, title: "Mine" }) });
+		change({ label: "Set title", kind: "set", path: ["title"], value: "Mine" });
 		const text = writeLayout(doc().saved);
 		expect(openText(text, null)).toEqual([]);
 		expect(useSession.getState().notice).toMatchObject({ text: expect.stringContaining("Mine"), command: "recover" });

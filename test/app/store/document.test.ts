@@ -1,14 +1,10 @@
 import { beforeEach, describe, expect, test } from "vitest";
-import { type newLayout, writeLayout } from "../../../app/store/core.ts";
-import { change, isDirty, markSaved, redoChange, undoChange, useDocument } from "../../../app/store/document.ts";
+import { change, endGesture, isDirty, markSaved, redoChange, undoChange, useDocument } from "../../../app/store/document.ts";
+import { redoLabel, undoLabel } from "../../../src/history/history.ts";
 import { startDemo } from "../../support/demo.ts";
 
 const doc = useDocument.getState;
-const rename = (title: string, key?: string) => ({
-	label: "rename",
-	...(key ? { key } : {}),
-	apply: (l: ReturnType<typeof newLayout>) => ({ ...l, title }),
-});
+const rename = (title: string) => ({ label: "Set title", kind: "set" as const, path: ["title"], value: title });
 beforeEach(startDemo);
 
 describe("the document", () => {
@@ -30,20 +26,37 @@ describe("the document", () => {
 	});
 	test("an edit that breaks the layout is refused with its path, and nothing changes", () => {
 		const before = doc();
-		const problems = change({ label: "break", apply: (l) => ({ ...l, habitat: { ...l.habitat, spin: { rate_rpm: 99 } } }) });
+		const problems = change({ label: "Break", kind: "set", path: ["habitat", "spin", "rate_rpm"], value: 99 });
 		expect(problems.map((p) => [p.path, p.value])).toEqual([["habitat.spin.rate_rpm", "99"]]);
 		expect(doc()).toBe(before);
 	});
 	test("undo and redo are named", () => {
 		change(rename("Other"));
-		expect([doc().history.undoLabel, doc().history.redoLabel]).toEqual(["rename", null]);
+		expect([undoLabel(doc().history), redoLabel(doc().history)]).toEqual(["Undo set title", null]);
 		undoChange();
-		expect([doc().history.undoLabel, doc().history.redoLabel]).toEqual([null, "rename"]);
+		expect([undoLabel(doc().history), redoLabel(doc().history)]).toEqual([null, "Redo set title"]);
 	});
-	test("edits of one key are one step", () => {
-		for (const title of ["A", "B", "C"]) change(rename(title, "title"));
+	test("edits of one gesture are one step, until it ends", () => {
+		const before = doc().layout.title;
+		for (const title of ["A", "B"]) change(rename(title), "title");
+		endGesture();
+		for (const title of ["C", "D"]) change(rename(title), "title");
 		undoChange();
-		expect(doc().layout.title).toBe(writeLayoutTitle());
+		expect(doc().layout.title).toBe("B");
+		undoChange();
+		expect(doc().layout.title).toBe(before);
+	});
+	test("an edit outside of a gesture is a step of its own", () => {
+		change(rename("A"), "title");
+		change(rename("B"));
+		undoChange();
+		expect(doc().layout.title).toBe("A");
+	});
+	test("put back by hand it is clean again", () => {
+		const before = doc().layout.title;
+		change(rename("A"));
+		change(rename(before));
+		expect(isDirty(doc())).toBe(false);
 	});
 	test("saving makes it clean, and an undo past it dirty", () => {
 		change(rename("Other"));
@@ -53,5 +66,3 @@ describe("the document", () => {
 		expect(isDirty(doc())).toBe(true);
 	});
 });
-
-const writeLayoutTitle = (): string => JSON.parse(writeLayout(doc().saved)).title;

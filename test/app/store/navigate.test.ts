@@ -30,10 +30,7 @@ beforeEach(() => {
 });
 afterEach(() => stop());
 
-const atRate = (rate_rpm: number) => ({
-	label: "set spin rate",
-	apply: (l: ReturnType<typeof layoutOf>) => ({ ...l, habitat: { ...l.habitat, spin: { rate_rpm } } }),
-});
+const atRate = (value: number) => ({ label: "Set spin rate", kind: "set" as const, path: ["habitat", "spin", "rate_rpm"], value });
 
 describe("the first screen", () => {
 	test("opens on an outside finding of a built activity, at its moment, and says why", () => {
@@ -112,7 +109,8 @@ describe("edits", () => {
 	});
 	test("where the case is gone the story opens anew", () => {
 		const gone = session().selected?.activity;
-		change({ label: "remove", apply: (l) => ({ ...l, activities: l.activities.filter((a) => a.id !== gone) }) });
+		const index = useDocument.getState().layout.activities.findIndex((a) => a.id === gone);
+		expect(change({ label: "Remove", kind: "remove", path: ["activities", index] })).toEqual([]);
 		expect(session().selected?.activity).not.toBe(gone);
 		expect(session().selected).not.toBeNull();
 	});
