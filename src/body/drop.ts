@@ -18,6 +18,8 @@ export interface Drop {
 	readonly diameter: number;
 	/** At t = 0 the release point: there the hand holds it before. */
 	readonly track: Track;
+	/** At release, m/s. Default none: it is let go. */
+	readonly velocity?: readonly [number, number, number];
 	readonly floor?: Floor;
 }
 
@@ -45,6 +47,8 @@ const EYE_LAG = 0.1;
 const HELD_GAZE = radFromDeg(45);
 const FREE_GAZE = Math.PI / 2;
 const LAG_SAMPLES = 8;
+/** How the hand moves once it is empty, × stature. */
+const SINK = [-0.02, -0.05, 0] as const;
 
 /** Minimum jerk from 0 to 1 (Flash & Hogan 1985), held beyond its ends. */
 export function minimumJerk(tau: number): number {
@@ -71,7 +75,7 @@ function pursued(track: Track, t: number, lag: number, out: Float64Array): void 
 }
 
 export function createDropper(drop: Drop): Dropper {
-	const { stature, diameter, hand, track } = drop;
+	const { stature, diameter, hand, track, velocity = [0, 0, 0] } = drop;
 	const side = sideOf(hand);
 	track(0, target);
 	const at = [target[0] as number, target[1] as number, target[2] as number] as const;
@@ -82,6 +86,7 @@ export function createDropper(drop: Drop): Dropper {
 		holding: diameter,
 		hand,
 		lowestGaze: HELD_GAZE,
+		velocity,
 		...(drop.floor === undefined ? {} : { floor: drop.floor }),
 	});
 	const pivot = new Float64Array(3);
@@ -94,9 +99,10 @@ export function createDropper(drop: Drop): Dropper {
 	const grip = new Float64Array(3);
 	gripPoint(stature, diameter, grip);
 	palmPoint(held, hand, diameter, target);
-	target[0] = (target[0] as number) - 0.02 * stature;
-	target[1] = (target[1] as number) - 0.05 * stature;
-	solveArm(eased, side, target, grip, palmDirection(at[1] / stature, side));
+	// the hand sinks, and follows what it throws a little
+	const follow = Math.min(0.05, (0.07 * stature) / Math.max(Math.hypot(...velocity), 1e-9));
+	for (let k = 0; k < 3; k++) target[k] = (target[k] as number) + follow * (velocity[k] as number) + (SINK[k] as number) * stature;
+	solveArm(eased, side, target, grip, palmDirection(at[1] / stature, side, velocity));
 	return { side, diameter, track, held, eased, pivot, bow: chestBow(direction) };
 }
 

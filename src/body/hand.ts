@@ -24,8 +24,8 @@ export function gripPoint(stature: number, diameter: number, out: Float64Array):
 const wrap = (radius: number, half: number, most: number): number => Math.min(Math.PI - 2 * Math.atan(radius / half), most);
 
 const OPEN = {
-	fingers: radFromDeg(12),
-	fingertips: radFromDeg(14),
+	fingers: radFromDeg(17),
+	fingertips: radFromDeg(22),
 	thumb: [radFromDeg(38), radFromDeg(16), radFromDeg(30)],
 	thumbTip: radFromDeg(12),
 } as const;

@@ -51,7 +51,7 @@ export const JOINT: Readonly<Record<TrunkName | LimbName, Joint>> = {
 		axis("bend to the right", -15, 15, "practice"),
 		axis("turn to the left", -42, 42, "practice"),
 	],
-	collar: [FIXED, axis("elevation", -8, 30), axis("protraction", -15, 22)],
+	collar: [FIXED, axis("elevation", -10, 30), axis("protraction", -15, 22)],
 	upperArm: [axis("flexion", -60, 180), axis("abduction", -45, 90), axis("internal rotation", -90, 80)],
 	forearm: [axis("flexion", 0, 145), FIXED, axis("pronation", -80, 85)],
 	hand: [axis("radial deviation", -30, 20), axis("flexion", -70, 75), FIXED],

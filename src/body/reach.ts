@@ -18,6 +18,8 @@ export interface StandingReach {
 	/** Diameter of what is held, m; null for an open hand. */
 	readonly holding: number | null;
 	readonly hand: Hand;
+	/** Velocity the held body is about to leave with, m/s: the palm turns to let it go that way. Default none. */
+	readonly velocity?: readonly [number, number, number];
 	/** The eyes look at most this far below the horizon, rad. Default: as far as they go. */
 	readonly lowestGaze?: number;
 	readonly floor?: Floor;
@@ -30,15 +32,20 @@ const WRIST = { deviation: radFromDeg(4), flexion: radFromDeg(-20) } as const;
 const direction = new Float64Array(3);
 const pivot = new Float64Array(3);
 
-/** Where the palm faces at a height (× stature): down and inward; overhead, forward and inward. */
-export function palmDirection(height: number, side: Side): Float64Array {
+/**
+ * Where the palm faces at a height (× stature): down and inward; overhead, forward and inward; turned
+ * towards where a body is thrown, wholly so from 2 m/s on.
+ */
+export function palmDirection(height: number, side: Side, velocity: readonly [number, number, number] = [0, 0, 0]): Float64Array {
 	const high = Math.min(1, Math.max(0, (height - 0.72) / 0.4));
 	const blend = high * high * (3 - 2 * high);
-	const x = -0.1 + 0.4 * blend;
-	const y = -0.8 + 0.5 * blend;
-	const z = -0.6 - 0.2 * blend;
+	const throwing = 1 / Math.max(2, Math.hypot(...velocity));
+	const rest = 1 - Math.min(1, Math.hypot(...velocity) / 2);
+	const x = (-0.1 + 0.4 * blend) * rest + velocity[0] * throwing;
+	const y = (-0.8 + 0.5 * blend) * rest + velocity[1] * throwing;
+	const z = (-0.6 - 0.2 * blend) * outward(side) * rest + velocity[2] * throwing;
 	const l = Math.hypot(x, y, z);
-	return new Float64Array([x / l, y / l, (z / l) * outward(side)]);
+	return l > 1e-6 ? new Float64Array([x / l, y / l, z / l]) : new Float64Array([0, -1, 0]);
 }
 
 export function poseStandingReach(input: StandingReach): Pose {
@@ -58,7 +65,7 @@ export function poseStandingReach(input: StandingReach): Pose {
 		side,
 		target: new Float64Array(handTarget),
 		grip,
-		palm: palmDirection((handTarget[1] as number) / stature, side),
+		palm: palmDirection(handTarget[1] / stature, side, input.velocity),
 	});
 	pose.reach = gap <= REACHED ? { kind: "reached" } : { kind: "short", gap };
 	const lowest = input.lowestGaze ?? Math.PI / 2;

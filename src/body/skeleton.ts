@@ -82,10 +82,10 @@ const trunkDrafts: readonly Draft[] = [
 	{
 		name: "abdomen",
 		parent: "pelvis",
-		offset: [-0.012, f("lumbarHeight") - f("hipHeight"), 0],
+		offset: [-0.006, f("lumbarHeight") - f("hipHeight"), 0],
 		sign: SPINE,
 		mass: "abdomen",
-		centre: [0.014, 0.037, 0],
+		centre: [0.008, 0.037, 0],
 	},
 	{
 		name: "thorax",
@@ -93,9 +93,9 @@ const trunkDrafts: readonly Draft[] = [
 		offset: [0.004, f("thoraxHeight") - f("lumbarHeight"), 0],
 		sign: SPINE,
 		mass: "thorax",
-		centre: [0.008, 0.09, 0],
+		centre: [0.002, 0.09, 0],
 	},
-	{ name: "neck", parent: "thorax", offset: [-0.01, f("neckHeight") - f("thoraxHeight"), 0], sign: SPINE },
+	{ name: "neck", parent: "thorax", offset: [-0.016, f("neckHeight") - f("thoraxHeight"), 0], sign: SPINE },
 	{
 		name: "head",
 		parent: "neck",
@@ -106,7 +106,7 @@ const trunkDrafts: readonly Draft[] = [
 	},
 ];
 const limbDrafts: readonly Draft[] = [
-	{ name: "collar", parent: "thorax", offset: [0.022, 0.822 - f("thoraxHeight"), f("collarHalf")], sign: [1, -1, 1] },
+	{ name: "collar", parent: "thorax", offset: [0.016, 0.822 - f("thoraxHeight"), f("collarHalf")], sign: [1, -1, 1] },
 	{
 		name: "upperArm",
 		parent: "collar",

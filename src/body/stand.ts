@@ -57,7 +57,7 @@ const BASE = {
 	/** Leg length over its straight length: soft knees. */
 	straightness: 0.9968,
 	/** Shoulders hang a little below the skeleton's erect landmark. */
-	shoulders: radFromDeg(-6),
+	shoulders: radFromDeg(-8),
 } as const;
 
 /** Parameters of the search: metres are × stature; one row each: name, ease (what costs as much as one residual). */
@@ -150,7 +150,7 @@ function hangArm(pose: Pose, side: Side, pitch: number, aside: number, crouch: n
 	const { angle } = pose;
 	const upperArm = 3 * limb(side, "upperArm");
 	angle[upperArm] = radFromDeg(-3) + 0.85 * pitch;
-	angle[upperArm + 1] = radFromDeg(8.5) + aside + 0.9 * crouch;
+	angle[upperArm + 1] = radFromDeg(9.5) + aside + 0.9 * crouch;
 	angle[upperArm + 2] = radFromDeg(4);
 	const forearm = 3 * limb(side, "forearm");
 	angle[forearm] = radFromDeg(20);

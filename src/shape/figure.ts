@@ -9,12 +9,15 @@ import { COLOUR } from "./palette.ts";
 /** How far the ink hull stands out from the skin, m: its width as a silhouette line. */
 const INK = 0.0035;
 
+/** So near to one's own eyes that an ink edge of that width would be a bar. */
+const NEAR: ReadonlySet<string> = new Set(["thorax", "abdomen", "collar", "upperArm"]);
+
 /** The crew figure as rigid skinned segments, each with an inverted hull that draws its ink edge. */
 export interface Figure {
 	readonly stature: number;
 	/** Skins first, then hulls; a segment's skin and hull share one matrix. */
 	readonly parts: readonly Part[];
-	/** Of `parts`: what the person does not see of themselves through their own eyes. */
+	/** Of `parts`: what is left out of the view through the person's own eyes: head, neck, and the ink of the trunk. */
 	readonly hiddenInFirstPerson: readonly Part[];
 	/** One matrix a segment, in the order of SEGMENTS. */
 	readonly matrices: readonly Float32Array[];
@@ -62,6 +65,7 @@ export function createFigure(stature: number): Figure {
 		skins.push(pair[0] as Part);
 		hulls.push(pair[1] as Part);
 		if (name === "head" || name === "neck") hidden.push(...pair);
+		else if (NEAR.has(name)) hidden.push(pair[1] as Part);
 	});
 	return { stature, parts: [...skins, ...hulls], hiddenInFirstPerson: hidden, matrices };
 }

@@ -52,7 +52,7 @@ describe("the crew figure", () => {
 	it("has a skin and an ink hull a segment, within the triangle budget", () => {
 		expect(figure.parts).toHaveLength(2 * SEGMENT_COUNT);
 		const count = (list: readonly Triangles[]) => list.reduce((s, d) => s + d.index.length / 3, 0);
-		expect(count(skins)).toBeLessThan(6500);
+		expect(count(skins)).toBeLessThan(6300);
 		expect(count(hulls)).toBe(count(skins));
 	});
 
@@ -82,7 +82,9 @@ describe("the crew figure", () => {
 			expect(hull.colour.every((c) => c === COLOUR.ink)).toBe(true);
 			for (let v = 0; v < hull.position.length; v += 3) {
 				const d = [0, 1, 2].map((k) => (hull.position[v + k] as number) - (skin.position[v + k] as number));
-				expect(Math.hypot(...d)).toBeCloseTo(0.0035, 5);
+				// the slabs of the soles have no edge of their own
+				if (skin.colour[v / 3] === COLOUR.coaming) expect(Math.hypot(...d)).toBe(0);
+				else expect(Math.hypot(...d)).toBeCloseTo(0.0035, 5);
 			}
 			expect(volume(hull)).toBeGreaterThan(volume(skin));
 		});
@@ -140,13 +142,12 @@ describe("the crew figure", () => {
 		expect((figure.parts[SEGMENT_COUNT + limb(RIGHT, "hand")] as Part).matrix).toBe(hand(RIGHT));
 	});
 
-	it("names the parts that one's own eyes do not see", () => {
-		expect(figure.hiddenInFirstPerson.map((p) => p.drawable.name).sort()).toEqual([
-			"crew-head",
-			"crew-head-ink",
-			"crew-neck",
-			"crew-neck-ink",
-		]);
+	it("leaves head and neck out of the view through one's own eyes, and the ink of what is near to them", () => {
+		const names = figure.hiddenInFirstPerson.map((p) => p.drawable.name);
+		expect(names.filter((n) => !n.endsWith("-ink")).sort()).toEqual(["crew-head", "crew-neck"]);
+		expect(names).toContain("crew-head-ink");
+		expect(names).toContain("crew-thorax-ink");
+		expect(names).not.toContain("crew-right-hand-ink");
 	});
 
 	it("refuses a pose of another stature", () => {
