@@ -146,10 +146,8 @@ export const layoutSchema = z.strictObject({
 });
 
 export type LayoutFile = z.infer<typeof layoutSchema>;
-export type HabitatFile = LayoutFile["habitat"];
 export type SpinFile = z.infer<typeof spin>;
 export type DeckFile = z.infer<typeof deck>;
-export type WalkwayFile = z.infer<typeof walkway>;
 export type PhaseFile = z.infer<typeof phase>;
 export type ElementFile = z.infer<typeof element>;
 export type LadderFile = z.infer<typeof ladder>;
