@@ -62,6 +62,7 @@ export class Conductor {
 		cancelAnimationFrame(this.scheduled);
 		clearTimeout(this.resting);
 		this.scheduled = 0;
+		this.resting = 0;
 	}
 
 	private frame = (now: number): void => {
@@ -76,7 +77,13 @@ export class Conductor {
 		if (!playing) this.resting = window.setTimeout(this.rest, REST);
 	};
 
+	/** Whether no frame is due and the last picture was painted in full. */
+	get still(): boolean {
+		return this.scheduled === 0 && this.resting === 0;
+	}
+
 	private rest = (): void => {
+		this.resting = 0;
 		if (this.scheduled === 0 && !this.step(this.stillRatio(), true)) this.wake();
 	};
 
