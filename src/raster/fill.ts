@@ -1,13 +1,15 @@
 import type { Buffers } from "./buffers.ts";
 import { RAMP, type Tones } from "./tone.ts";
 
+export type DepthUse = "write" | "test" | "ignore";
+
 /** How the triangles of one drawable are laid on. */
 export interface Paint {
 	readonly tones: Tones;
 	/** First place of the colour in `tones.words`. */
 	base: number;
-	/** Opaque: writes depth. Otherwise painted over what stands, by `opacity`, and depth stays. */
-	opaque: boolean;
+	/** Opaque writes depth; otherwise it is painted over what stands, by `opacity`, where that is not nearer or everywhere. */
+	depth: DepthUse;
 	opacity: number;
 	/** Painted as if nearer by a little: `relative` of its own depth and `slope` pixels along its own plane. */
 	relative: number;
@@ -64,7 +66,9 @@ export function fill(buffers: Buffers, corners: Corners, i: number, j: number, k
 	const sc = lc * corners[c + 2]! - s0;
 	const sx = (sb * acy - sc * aby) / area;
 	const sy = (sc * abx - sb * acx) / area;
-	const { opaque, opacity } = paint;
+	const { opacity } = paint;
+	const opaque = paint.depth === "write";
+	const over = paint.depth === "ignore";
 	const { words: ramp, bytes } = paint.tones;
 	const nearer = 1 + paint.relative;
 	const lift = paint.slope * (Math.abs(wx) + Math.abs(wy));
@@ -86,7 +90,7 @@ export function fill(buffers: Buffers, corners: Corners, i: number, j: number, k
 		if (!opaque) {
 			let s = s0 + sx * (from + 0.5 - ax) + sy * (yc - ay);
 			for (; at < stop; at++) {
-				if (w * nearer + lift > depth[at]!) {
+				if (over || w * nearer + lift > depth[at]!) {
 					const t = 4 * (flat ? tone : base + Math.min(RAMP - 1, (s / w) | 0));
 					for (let n = 0, p = 4 * at; n < 3; n++, p++) {
 						const under = pixels[p]!;

@@ -1,6 +1,7 @@
-import type { WideLines } from "../shape/drawable.ts";
+import type { Part, WideLines } from "../shape/drawable.ts";
 import type { Buffers } from "./buffers.ts";
 import { plain, type Tones } from "./tone.ts";
+import { drawn } from "./triangles.ts";
 import type { View } from "./view.ts";
 
 /**
@@ -37,7 +38,7 @@ export function drawLines(
 	buffers: Buffers,
 	view: View,
 	drawable: WideLines,
-	m: Float64Array,
+	part: Part | null,
 	pixelRatio: number,
 	scratch: LineScratch,
 	tones: Tones,
@@ -47,7 +48,9 @@ export function drawLines(
 	ends[8] = (drawable.width * pixelRatio) / 2;
 	scratch.count = 0;
 	let run = 0;
-	for (let k = 0; k < position.length; k += 6) {
+	const m = part ? view.part : view.stage;
+	const end = drawn(position.length, 6, part);
+	for (let k = 0; k < end; k += 6) {
 		if (dash) {
 			if (k === 0 || position[k] !== position[k - 3] || position[k + 1] !== position[k - 2] || position[k + 2] !== position[k - 1]) run = 0;
 			ends[3] = run;

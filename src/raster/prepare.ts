@@ -1,13 +1,15 @@
 import type { Drawable, Triangles } from "../shape/drawable.ts";
 import { lambert } from "../shape/light.ts";
 import { PALETTE_BYTES } from "../shape/palette.ts";
-import { neighbours } from "./rim.ts";
+import { neighbours, pieces } from "./neighbours.ts";
 import { level } from "./tone.ts";
 
 /** What is worked out once for a drawable; empty where it has no use. */
 export interface Prepared {
-	/** Of opaque triangles: `neighbours`. */
+	/** Of triangles: `neighbours`. */
 	readonly across: Int32Array;
+	/** Of painted triangles: `pieces`. Of opaque ones: all as one. */
+	readonly pieces: Uint32Array;
 	/** Of lit triangles the ramp level of each vertex standing still, seen from the front and from behind. */
 	readonly front: Float32Array;
 	readonly back: Float32Array;
@@ -15,14 +17,17 @@ export interface Prepared {
 
 const NONE = new Float32Array(0);
 const ALONE = new Int32Array(0);
+const WHOLE = new Uint32Array([0xffffffff]);
 
 /** Checks a drawable and prepares it. Throws RangeError with name, place and value on what cannot be drawn. */
 export function prepare(drawable: Drawable): Prepared {
 	check(drawable);
-	if (drawable.kind !== "triangles") return { across: ALONE, front: NONE, back: NONE };
+	if (drawable.kind !== "triangles") return { across: ALONE, pieces: WHOLE, front: NONE, back: NONE };
 	const { lit, side } = drawable;
+	const across = neighbours(drawable);
 	return {
-		across: drawable.opacity < 1 || drawable.decal ? ALONE : neighbours(drawable),
+		across,
+		pieces: drawable.opacity < 1 || drawable.decal || drawable.over ? pieces(across) : WHOLE,
 		front: lit && side !== "back" ? levels(drawable, 1) : NONE,
 		back: lit && side !== "front" ? levels(drawable, -1) : NONE,
 	};

@@ -2,13 +2,13 @@ import type { Camera } from "../shape/camera.ts";
 import type { Drawable, Part, Triangles, WideLines } from "../shape/drawable.ts";
 import type { ColourIndex } from "../shape/palette.ts";
 import { type Buffers, createBuffers, halve } from "./buffers.ts";
-import type { Paint } from "./fill.ts";
+import type { DepthUse, Paint } from "./fill.ts";
 import { createLineScratch, drawLines } from "./lines.ts";
 import { type Prepared, prepare } from "./prepare.ts";
-import { drawRims } from "./rim.ts";
 import { drawStars } from "./stars.ts";
 import { createTones, plain } from "./tone.ts";
-import { createVertexScratch, drawTriangles } from "./triangles.ts";
+import { drawTriangles } from "./triangles.ts";
+import { createVertexScratch } from "./vertices.ts";
 import { createView, placePart, setView } from "./view.ts";
 
 /** A picture. The centre of pixel (i, j) lies at (i + 0.5, j + 0.5) px, as `project` counts them. */
@@ -24,7 +24,7 @@ export interface RasterTarget {
 export interface RasterScene {
 	/** Positions may change in place between pictures; everything else of a drawable is read once. */
 	readonly still: readonly Drawable[];
-	/** Those to be seen. Their `matrix` is read for every picture. */
+	/** What is not readonly of them is read for every picture. */
 	readonly parts: readonly Part[];
 	/** ICRS → stage, 9 numbers, row by row. */
 	readonly skyRotation: Float64Array;
@@ -35,10 +35,11 @@ export interface RasterScene {
 
 export interface Raster extends RasterTarget {
 	/**
-	 * Draws the scene: opaque triangles, stars behind them, their edges smoothed, opaque decals, solid lines, then all that is translucent
-	 * in list order (`still` before `parts`), then lines over everything. Quality 2 draws at twice the
-	 * size and halves. Colours are blended as encoded, light of stars as linear. Allocates nothing once
-	 * it has seen the scene. Throws RangeError, naming it, on a drawable that cannot be drawn.
+	 * Draws the scene: opaque triangles, stars behind them, rims smoothed, opaque decals, solid lines, then
+	 * all that is translucent in list order (`still` before `parts`), then what is over everything.
+	 * Quality 2 draws at twice the size and halves. Colours are blended as encoded, light of stars as
+	 * linear. Allocates nothing once it has seen the scene. The camera's `far` is not used. Throws
+	 * RangeError, naming it, on a drawable that cannot be drawn.
 	 */
 	render(scene: RasterScene, camera: Camera, quality?: 1 | 2): void;
 	resize(width: number, height: number): void;
@@ -50,10 +51,19 @@ const DECAL = { relative: 2e-4, slope: 1 } as const;
 type Pass = "opaque" | "rim" | "decal" | "solid" | "translucent" | "over";
 
 const belongs = (d: Triangles | WideLines, pass: Pass): boolean => {
-	if (d.kind === "lines" && d.depth === "over") return pass === "over";
+	if (d.kind === "lines" ? d.depth === "over" : d.over === true) return pass === "over";
 	if (d.opacity < 1) return pass === "translucent";
 	if (d.kind === "lines") return pass === "solid";
 	return d.decal ? pass === "decal" : pass === "opaque" || pass === "rim";
+};
+
+const DEPTH_USE: Readonly<Record<Pass, DepthUse>> = {
+	opaque: "write",
+	rim: "write",
+	decal: "test",
+	solid: "test",
+	translucent: "test",
+	over: "ignore",
 };
 
 const AFTER_STARS: readonly Pass[] = ["rim", "decal", "solid", "translucent", "over"];
@@ -65,7 +75,7 @@ export function createRaster(width: number, height: number): Raster {
 	const view = createView();
 	const vertices = createVertexScratch();
 	const ink = createLineScratch();
-	const paint: Paint = { tones, base: 0, opaque: true, opacity: 1, relative: 0, slope: 0 };
+	const paint: Paint = { tones, base: 0, depth: "write", opacity: 1, relative: 0, slope: 0 };
 	const known = new WeakMap<Drawable, Prepared>();
 
 	const preparedOf = (drawable: Drawable): Prepared => {
@@ -77,27 +87,24 @@ export function createRaster(width: number, height: number): Raster {
 		return p;
 	};
 
-	const draw = (buffers: Buffers, drawable: Triangles | WideLines, matrix: Float32Array | null, pixelRatio: number, pass: Pass): void => {
+	const draw = (buffers: Buffers, drawable: Triangles | WideLines, part: Part | null, pixelRatio: number, pass: Pass): void => {
 		const prepared = preparedOf(drawable);
-		if (matrix) placePart(view, matrix, drawable.name);
+		if (part) placePart(view, part.matrix, drawable.name);
 		if (drawable.kind === "lines") {
-			drawLines(buffers, view, drawable, matrix ? view.part : view.stage, pixelRatio, ink, tones);
+			drawLines(buffers, view, drawable, part, pixelRatio, ink, tones);
 			return;
 		}
-		if (pass === "rim") {
-			drawRims(buffers, view, drawable, prepared.across, matrix, vertices);
-			return;
-		}
-		paint.opaque = !drawable.decal && drawable.opacity === 1;
+		paint.depth = DEPTH_USE[pass];
 		paint.opacity = drawable.opacity;
 		paint.relative = drawable.decal ? DECAL.relative : 0;
 		paint.slope = drawable.decal ? DECAL.slope : 0;
-		drawTriangles(buffers, view, drawable, prepared, matrix, vertices, paint);
+		const what = pass === "opaque" ? "fill" : pass === "rim" ? "rim" : "both";
+		drawTriangles(buffers, view, drawable, prepared, part, vertices, paint, what);
 	};
 
 	const drawPass = (buffers: Buffers, scene: RasterScene, pixelRatio: number, pass: Pass): void => {
 		for (const d of scene.still) if (d.kind !== "stars" && belongs(d, pass)) draw(buffers, d, null, pixelRatio, pass);
-		for (const p of scene.parts) if (belongs(p.drawable, pass)) draw(buffers, p.drawable, p.matrix, pixelRatio, pass);
+		for (const p of scene.parts) if (p.visible !== false && belongs(p.drawable, pass)) draw(buffers, p.drawable, p, pixelRatio, pass);
 	};
 
 	return {

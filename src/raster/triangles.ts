@@ -1,234 +1,108 @@
-import type { Triangles } from "../shape/drawable.ts";
-import { lambert } from "../shape/light.ts";
+import type { Part, Triangles } from "../shape/drawable.ts";
 import type { Buffers } from "./buffers.ts";
-import { type Corners, fill, type Paint } from "./fill.ts";
+import { fill, type Paint } from "./fill.ts";
 import type { Prepared } from "./prepare.ts";
-import { level, RAMP } from "./tone.ts";
+import { rim } from "./rim.ts";
+import { RAMP } from "./tone.ts";
+import { corner, cut, FRONT, lighten, look, mirrors, NEAR, transform, UNSEEN, type VertexScratch } from "./vertices.ts";
 import type { View } from "./view.ts";
 
-/** Room for the vertices of one drawable; grows to the largest seen. */
-export interface VertexScratch {
-	/** Camera coordinates, 3 a vertex. */
-	camera: Float64Array;
-	/** x, y (px) and 1/z, 3 a vertex; meaningless before the near plane. */
-	screen: Float64Array;
-	/** A bit for each plane of the view that the vertex lies outside of. */
-	outside: Uint8Array;
-	/** A byte a triangle. */
-	seen: Uint8Array;
-	/** Levels of a part that moves, and of what is not lit. */
-	front: Float32Array;
-	back: Float32Array;
-	unlit: Float32Array;
-	readonly corners: Corners;
-}
-
-export const createVertexScratch = (): VertexScratch => ({
-	camera: new Float64Array(0),
-	screen: new Float64Array(0),
-	outside: new Uint8Array(0),
-	seen: new Uint8Array(0),
-	front: new Float32Array(0),
-	back: new Float32Array(0),
-	unlit: new Float32Array(0),
-	corners: new Float64Array(16),
-});
-
-export const NEAR = 1;
+/** How many of `length` numbers, `each` a triangle or segment, a part has drawn. */
+export const drawn = (length: number, each: number, part: Part | null): number =>
+	part?.count === undefined ? length : Math.min(length, each * Math.max(0, Math.trunc(part.count)));
 
 /**
- * Draws the triangles of a drawable: standing still where `matrix` is null, else a part whose matrix
- * is already in `view.part`.
+ * Fills the triangles of a drawable, smooths its rims, or both one piece after the other: standing still where `part` is null, else of a part whose matrix is already in `view.part`. A rim is a side
+ * across which nothing of the drawable is seen, or its other face.
  */
 export function drawTriangles(
 	buffers: Buffers,
 	view: View,
 	drawable: Triangles,
 	prepared: Prepared,
-	matrix: Float32Array | null,
+	part: Part | null,
+	scratch: VertexScratch,
+	paint: Paint,
+	what: "fill" | "rim" | "both",
+): void {
+	const { index, colour } = drawable;
+	if (!transform(view, part ? view.part : view.stage, drawable, scratch)) return;
+	const mirrored = part !== null && mirrors(part.matrix);
+	const end = drawn(index.length, 3, part);
+	look(drawable, end, mirrored, scratch);
+	const { seen } = scratch;
+	const lit = drawable.lit && what !== "rim";
+	if (part && lit) lighten(drawable, part.matrix, mirrored, scratch);
+	const front = lit ? (part ? scratch.front : prepared.front) : scratch.unlit;
+	const back = lit ? (part ? scratch.back : prepared.back) : scratch.unlit;
+	for (let piece = 0, from = 0; from < end; piece++) {
+		const to = Math.min(end, 3 * prepared.pieces[piece]!);
+		if (what !== "rim")
+			for (let k = from; k < to; k += 3) {
+				const own = seen[k / 3]!;
+				if (own === UNSEEN) continue;
+				paint.base = RAMP * colour[index[k]!]!;
+				fillTriangle(buffers, view, index, k, own === FRONT ? front : back, scratch, paint);
+			}
+		if (what !== "fill")
+			for (let k = from; k < to; k++) {
+				const t = Math.trunc(k / 3);
+				const own = seen[t]!;
+				if (own === UNSEEN) continue;
+				const n = prepared.across[k]!;
+				const other = n < 0 || 3 * n >= end ? UNSEEN : seen[n]!;
+				if (other === own || (other !== UNSEEN && n < t)) continue;
+				const first = index[3 * t]!;
+				const levels = own === FRONT ? front : back;
+				if (place(view, index[k]!, index[k % 3 === 2 ? k - 2 : k + 1]!, levels, scratch))
+					rim(buffers, scratch.corners, (own === FRONT) !== mirrored ? -1 : 1, paint, RAMP * colour[first]! + Math.trunc(levels[first]!));
+			}
+		from = to;
+	}
+}
+
+/** Fills the triangle at k of the index, cut at the near plane. */
+function fillTriangle(
+	buffers: Buffers,
+	view: View,
+	index: Uint32Array,
+	k: number,
+	levels: Float32Array,
 	scratch: VertexScratch,
 	paint: Paint,
 ): void {
-	const { index, colour, side, lit } = drawable;
-	if (!transform(view, matrix ? view.part : view.stage, drawable, scratch)) return;
 	const { screen, outside, corners, camera } = scratch;
-	const mirrored = matrix !== null && mirrors(matrix);
-	if (matrix && lit) lighten(drawable, matrix, mirrored, scratch);
-	const front = lit ? (matrix ? scratch.front : prepared.front) : scratch.unlit;
-	const back = lit ? (matrix ? scratch.back : prepared.back) : scratch.unlit;
-	for (let t = 0; t < index.length; t += 3) {
-		const a = index[t]!;
-		const b = index[t + 1]!;
-		const c = index[t + 2]!;
-		const oa = outside[a]!;
-		const ob = outside[b]!;
-		const oc = outside[c]!;
-		if ((oa & ob & oc) !== 0) continue;
-		const near = ((oa | ob | oc) & NEAR) !== 0;
-		const turn = near ? turnBehind(camera, 3 * a, 3 * b, 3 * c) : turnOnScreen(screen, 3 * a, 3 * b, 3 * c);
-		if (turn === LOST) throw new RangeError(`triangle ${t / 3} of "${drawable.name}" has a corner that is not finite`);
-		const facing = turn < 0 !== mirrored;
-		if (side !== "both" && facing !== (side === "front")) continue;
-		paint.base = RAMP * colour[a]!;
-		const levels = facing ? front : back;
-		if (!near) {
-			corner(corners, 0, screen, levels, a);
-			corner(corners, 4, screen, levels, b);
-			corner(corners, 8, screen, levels, c);
-			fill(buffers, corners, 0, 1, 2, paint);
-			continue;
-		}
-		let n = 0;
-		if ((oa & NEAR) === 0) n = corner(corners, n, screen, levels, a);
-		if (((oa ^ ob) & NEAR) !== 0) n = cut(corners, n, view, camera, levels, a, b);
-		if ((ob & NEAR) === 0) n = corner(corners, n, screen, levels, b);
-		if (((ob ^ oc) & NEAR) !== 0) n = cut(corners, n, view, camera, levels, b, c);
-		if ((oc & NEAR) === 0) n = corner(corners, n, screen, levels, c);
-		if (((oc ^ oa) & NEAR) !== 0) n = cut(corners, n, view, camera, levels, c, a);
+	const a = index[k]!;
+	const b = index[k + 1]!;
+	const c = index[k + 2]!;
+	const oa = outside[a]! & NEAR;
+	const ob = outside[b]! & NEAR;
+	const oc = outside[c]! & NEAR;
+	if ((oa | ob | oc) === 0) {
+		corner(corners, 0, screen, levels, a);
+		corner(corners, 4, screen, levels, b);
+		corner(corners, 8, screen, levels, c);
 		fill(buffers, corners, 0, 1, 2, paint);
-		if (n === 16) fill(buffers, corners, 0, 2, 3, paint);
+		return;
 	}
+	let n = 0;
+	if (oa === 0) n = corner(corners, n, screen, levels, a);
+	if (oa !== ob) n = cut(corners, n, view, camera, levels, a, b);
+	if (ob === 0) n = corner(corners, n, screen, levels, b);
+	if (ob !== oc) n = cut(corners, n, view, camera, levels, b, c);
+	if (oc === 0) n = corner(corners, n, screen, levels, c);
+	if (oc !== oa) n = cut(corners, n, view, camera, levels, c, a);
+	fill(buffers, corners, 0, 1, 2, paint);
+	if (n === 16) fill(buffers, corners, 0, 2, 3, paint);
 }
 
-/** A turn of what is not finite. */
-export const LOST = 2;
-const signOf = (x: number): number => (x < 0 ? -1 : x > 0 ? 1 : x === 0 ? 0 : LOST);
-
-/** −1 where the vertices at a, b, c run counter-clockwise as seen, 1 clockwise, 0 without area, else LOST. */
-export function turnOnScreen(screen: Float64Array, a: number, b: number, c: number): number {
-	const x = screen[a]!;
-	const y = screen[a + 1]!;
-	return signOf((screen[b]! - x) * (screen[c + 1]! - y) - (screen[b + 1]! - y) * (screen[c]! - x));
-}
-
-/** The same of a triangle that reaches behind the camera: the sign of −a · (b × c). */
-export function turnBehind(p: Float64Array, a: number, b: number, c: number): number {
-	const bx = p[b]!;
-	const by = p[b + 1]!;
-	const bz = p[b + 2]!;
-	const cx = p[c]!;
-	const cy = p[c + 1]!;
-	const cz = p[c + 2]!;
-	return signOf(-(p[a]! * (by * cz - bz * cy) + p[a + 1]! * (bz * cx - bx * cz) + p[a + 2]! * (bx * cy - by * cx)));
-}
-
-/** Writes vertex v as a corner; returns the next place. */
-export function corner(corners: Corners, at: number, screen: Float64Array, levels: Float32Array, v: number): number {
-	corners[at] = screen[3 * v]!;
-	corners[at + 1] = screen[3 * v + 1]!;
-	corners[at + 2] = screen[3 * v + 2]!;
-	corners[at + 3] = levels[v]!;
-	return at + 4;
-}
-
-/** Writes where the side a–b meets the near plane: always reckoned from the end beyond it, so that neighbours agree. */
-export function cut(corners: Corners, at: number, view: View, camera: Float64Array, levels: Float32Array, a: number, b: number): number {
-	const far = camera[3 * a + 2]! > camera[3 * b + 2]! ? a : b;
-	const close = far === a ? b : a;
-	const x = camera[3 * far]!;
-	const y = camera[3 * far + 1]!;
-	const z = camera[3 * far + 2]!;
-	const t = (z - view.near) / (z - camera[3 * close + 2]!);
-	const f = view.focal / view.near;
-	corners[at] = view.width / 2 + f * (x + t * (camera[3 * close]! - x));
-	corners[at + 1] = view.height / 2 - f * (y + t * (camera[3 * close + 1]! - y));
-	corners[at + 2] = 1 / view.near;
-	corners[at + 3] = levels[far]! + t * (levels[close]! - levels[far]!);
-	return at + 4;
-}
-
-/** Fills the scratch for all vertices; returns whether any can be seen. */
-export function transform(view: View, m: Float64Array, drawable: Triangles, scratch: VertexScratch): boolean {
-	const { position } = drawable;
-	const count = position.length / 3;
-	if (scratch.outside.length < count) {
-		const room = 2 ** Math.ceil(Math.log2(count));
-		scratch.camera = new Float64Array(3 * room);
-		scratch.screen = new Float64Array(3 * room);
-		scratch.outside = new Uint8Array(room);
-		scratch.unlit = new Float32Array(room).fill(level(1));
-	}
-	if (scratch.seen.length < drawable.index.length / 3) scratch.seen = new Uint8Array(2 ** Math.ceil(Math.log2(drawable.index.length / 3)));
-	const { camera, screen, outside } = scratch;
-	const { focal, near } = view;
-	const halfX = view.width / 2;
-	const halfY = view.height / 2;
-	const m0 = m[0]!;
-	const m1 = m[1]!;
-	const m2 = m[2]!;
-	const m3 = m[3]!;
-	const m4 = m[4]!;
-	const m5 = m[5]!;
-	const m6 = m[6]!;
-	const m7 = m[7]!;
-	const m8 = m[8]!;
-	const m9 = m[9]!;
-	const m10 = m[10]!;
-	const m11 = m[11]!;
-	let all = 31;
-	for (let v = 0, i = 0; v < count; v++, i += 3) {
-		const px = position[i]!;
-		const py = position[i + 1]!;
-		const pz = position[i + 2]!;
-		const x = m0 * px + m1 * py + m2 * pz + m3;
-		const y = m4 * px + m5 * py + m6 * pz + m7;
-		const z = m8 * px + m9 * py + m10 * pz + m11;
-		camera[i] = x;
-		camera[i + 1] = y;
-		camera[i + 2] = z;
-		const fx = focal * x;
-		const fy = focal * y;
-		const w = 1 / z;
-		screen[i] = halfX + fx * w;
-		screen[i + 1] = halfY - fy * w;
-		screen[i + 2] = w;
-		const bx = halfX * z;
-		const by = halfY * z;
-		const bits = (z < near ? NEAR : 0) | (fx < -bx ? 2 : 0) | (fx > bx ? 4 : 0) | (fy < -by ? 8 : 0) | (fy > by ? 16 : 0);
-		outside[v] = bits;
-		all &= bits;
-	}
-	return all === 0 && count > 0;
-}
-
-/** Whether a column-major 4 × 4 turns right hands into left ones. */
-export function mirrors(m: Float32Array): boolean {
-	const x = m[5]! * m[10]! - m[6]! * m[9]!;
-	const y = m[6]! * m[8]! - m[4]! * m[10]!;
-	const z = m[4]! * m[9]! - m[5]! * m[8]!;
-	return m[0]! * x + m[1]! * y + m[2]! * z < 0;
-}
-
-/** Writes the levels of a part as its matrix has it turned: normals go by the inverse transpose. */
-function lighten(drawable: Triangles, m: Float32Array, mirrored: boolean, scratch: VertexScratch): void {
-	const a = m[0]!;
-	const b = m[1]!;
-	const c = m[2]!;
-	const d = m[4]!;
-	const e = m[5]!;
-	const f = m[6]!;
-	const g = m[8]!;
-	const h = m[9]!;
-	const i = m[10]!;
-	const { normal, side } = drawable;
-	const count = normal.length / 3;
-	if (scratch.front.length < count) {
-		const room = 2 ** Math.ceil(Math.log2(count));
-		scratch.front = new Float32Array(room);
-		scratch.back = new Float32Array(room);
-	}
-	const { front, back } = scratch;
-	const sign = mirrored ? -1 : 1;
-	for (let v = 0, k = 0; v < count; v++, k += 3) {
-		const x = normal[k]!;
-		const y = normal[k + 1]!;
-		const z = normal[k + 2]!;
-		const nx = x * (e * i - f * h) + y * (h * c - i * b) + z * (b * f - c * e);
-		const ny = x * (f * g - d * i) + y * (i * a - g * c) + z * (c * d - a * f);
-		const nz = x * (d * h - e * g) + y * (g * b - h * a) + z * (a * e - b * d);
-		const size = sign * Math.sqrt(nx * nx + ny * ny + nz * nz);
-		const scale = size === 0 ? 0 : 1 / size;
-		if (side !== "back") front[v] = level(lambert(scale * nx, scale * ny, scale * nz));
-		if (side !== "front") back[v] = level(lambert(-scale * nx, -scale * ny, -scale * nz));
-	}
+/** Writes the side a–b as corners 0 and 1, cut at the near plane; returns whether any of it can be seen. */
+function place(view: View, a: number, b: number, levels: Float32Array, scratch: VertexScratch): boolean {
+	const { screen, outside, corners, camera } = scratch;
+	if ((outside[a]! & outside[b]!) !== 0) return false;
+	if ((outside[a]! & NEAR) === 0) corner(corners, 0, screen, levels, a);
+	else cut(corners, 0, view, camera, levels, a, b);
+	if ((outside[b]! & NEAR) === 0) corner(corners, 4, screen, levels, b);
+	else cut(corners, 4, view, camera, levels, a, b);
+	return true;
 }

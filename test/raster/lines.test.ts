@@ -61,6 +61,28 @@ describe("width", () => {
 		expect(Math.abs(row(27) - (20 + 2 * Math.sqrt(36 - 4.5 ** 2)))).toBeLessThan(0.5);
 	});
 
+	it("a part shows as many segments as it counts", () => {
+		const raster = createRaster(N, N);
+		const path = lines(
+			[
+				[-20, 0, -32],
+				[-10, 0, -32],
+				[0, 0, -32],
+				[10, 0, -32],
+			],
+			COLOUR.ink,
+			{ width: 2 },
+		);
+		const shown = (count: number): Uint8ClampedArray => {
+			raster.render(scene([], [{ drawable: path, matrix: at(0, 0, 0), count }], WHITE), plan);
+			return raster.pixels.slice();
+		};
+		raster.render(scene([{ ...path, position: path.position.slice(0, 12), colour: path.colour.slice(0, 2) }], [], WHITE), plan);
+		expect(shown(2)).toEqual(raster.pixels.slice());
+		expect(shown(0).every((v) => v === 255)).toBe(true);
+		expect(shown(3)).toEqual(shown(7));
+	});
+
 	it("a line that is a point is a dot", () => {
 		const ink = inkOf([
 			lines(

@@ -11,7 +11,9 @@ import { PALETTE } from "../../src/shape/palette.ts";
 export interface OraclePixel {
 	/** Distance along the view, m; Infinity where nothing stands. */
 	readonly depth: number;
-	/** Number of the nearest opaque triangle counted through all drawables, or −1. */
+	/** What is seen: the nearest opaque triangle and the translucent ones before it, each counted through all drawables. */
+	readonly seen: string;
+	/** Number of the nearest opaque triangle, or −1. */
 	readonly id: number;
 	/** sRGB 0…255, not rounded. */
 	readonly colour: readonly [number, number, number];
@@ -69,6 +71,7 @@ export function cast(drawables: readonly Triangles[], camera: Camera, width: num
 			const d = [0, 1, 2].map((k) => basis[k]! * x + basis[3 + k]! * y + basis[6 + k]!);
 			let depth = Number.POSITIVE_INFINITY;
 			let id = -1;
+			let seen = "";
 			let colour = encoded(background);
 			const visit = (translucent: boolean): void => {
 				let count = 0;
@@ -83,8 +86,10 @@ export function cast(drawables: readonly Triangles[], camera: Camera, width: num
 							(m) => sign * ((1 - at.u - at.v) * t.normal[3 * a + m]! + at.u * t.normal[3 * b + m]! + at.v * t.normal[3 * c + m]!),
 						);
 						const own = t.lit ? shade(t.colour[a]!, n as [number, number, number]) : encoded(t.colour[a]!);
-						if (translucent) colour = colour.map((under, m) => under + (own[m]! - under) * t.opacity) as [number, number, number];
-						else {
+						if (translucent) {
+							seen += ` ${t.name}`;
+							colour = colour.map((under, m) => under + (own[m]! - under) * t.opacity) as [number, number, number];
+						} else {
 							depth = at.z;
 							id = count;
 							colour = own;
@@ -94,7 +99,7 @@ export function cast(drawables: readonly Triangles[], camera: Camera, width: num
 			};
 			visit(false);
 			visit(true);
-			out.push({ depth, id, colour });
+			out.push({ depth, id, seen: `${id}${seen}`, colour });
 		}
 	return out;
 }
