@@ -2,6 +2,8 @@ import type { Series, SummaryValue } from "./activity/result.ts";
 import type { Assessed, AssessedCase } from "./assess.ts";
 import type { Finding } from "./criteria/row.ts";
 import type { Overridden } from "./layout/assumptions.ts";
+import { written } from "./quantity/round.ts";
+import { reasonsOfSeries } from "./series.ts";
 
 export const ASSESSMENT_FORMAT = "offplumb-assessment";
 export const ASSESSMENT_VERSION = 1;
@@ -25,23 +27,32 @@ export interface AssessmentActivity {
 	readonly phase: string;
 	readonly summary: Readonly<Record<string, SummaryValue>>;
 	readonly reasons: Readonly<Record<string, string>>;
-	readonly series?: Series;
+	/** Only where asked for; null where the kind is not built. */
+	readonly series?: Series | null;
 }
 
 /** The assessment as it is written; `series` gives the samples of a case, or null where its kind is not built. */
-export function assessmentDocument(assessed: Assessed, toolVersion: string, series?: (c: AssessedCase) => Series | null): AssessmentDocument {
+export function assessmentDocument(
+	assessed: Assessed,
+	toolVersion: string,
+	series?: (c: AssessedCase) => Series | null,
+): AssessmentDocument {
 	return {
 		format: ASSESSMENT_FORMAT,
 		version: ASSESSMENT_VERSION,
 		layout: { title: assessed.layout.title, sha256: assessed.sha256 },
 		tool: { version: toolVersion },
-		assumptions: assessed.overridden,
-		activities: assessed.cases.map((c) => {
-			const samples = series?.(c) ?? null;
-			return { id: c.id, kind: c.kind, crew: c.crew, phase: c.phase, summary: c.summary, reasons: c.reasons, ...(samples ? { series: samples } : {}) };
-		}),
-		findings: assessed.findings,
+		assumptions: assessed.overridden.map((a) => ({ ...a, used: written(a.used) })),
+		activities: assessed.cases.map((c) => activityOf(c, series)),
+		findings: assessed.findings.map((f) => ({ ...f, limit: written(f.limit) })),
 	};
+}
+
+function activityOf(c: AssessedCase, series?: (c: AssessedCase) => Series | null): AssessmentActivity {
+	const bare = { id: c.id, kind: c.kind, crew: c.crew, phase: c.phase, summary: c.summary, reasons: c.reasons };
+	if (!series) return bare;
+	const samples = series(c);
+	return { ...bare, reasons: { ...c.reasons, ...(samples ? reasonsOfSeries(samples) : { series: "not built" }) }, series: samples };
 }
 
 /**

@@ -6,6 +6,7 @@ import { seriesOf } from "../series.ts";
 import { type Call, only, Refusal } from "./call.ts";
 import { SHIPPED_ROWS } from "./criteria.ts";
 import { csvOf } from "./csv.ts";
+import { print } from "./print.ts";
 import { readLayout } from "./read.ts";
 import { assessmentTable } from "./table.ts";
 import { TOOL_VERSION } from "./version.ts";
@@ -14,24 +15,26 @@ export async function assessCommand(call: Call): Promise<number> {
 	only(call, "assess", ["json", "series", "csv"], 1);
 	const [path] = call.positionals;
 	if (path === undefined) throw new Refusal("assess takes a layout file, or - for standard input");
+	const { json, series, csv } = call.options;
+	if (series && !json && csv === undefined) throw new Refusal("--series is written as JSON: add --json, or use --csv DIR");
 	const assessed = assess(await readLayout(path), SHIPPED_ROWS);
-	if (call.options.csv !== undefined) await writeCsv(call.options.csv, assessed);
-	if (call.options.json) {
-		const document = assessmentDocument(assessed, TOOL_VERSION, call.options.series ? seriesOf : undefined);
-		process.stdout.write(`${JSON.stringify(document, null, call.options.series ? 0 : 2)}\n`);
-	} else {
-		if (call.options.series) throw new Refusal("--series is written as JSON: add --json, or use --csv DIR");
-		process.stdout.write(assessmentTable(assessed, process.stdout.isTTY === true));
-	}
+	if (csv !== undefined) await writeCsv(csv, assessed);
+	await print(
+		json
+			? `${JSON.stringify(assessmentDocument(assessed, TOOL_VERSION, series ? seriesOf : undefined), null, series ? 0 : 2)}\n`
+			: assessmentTable(assessed, process.stdout.isTTY === true),
+	);
 	return exitStatus(assessed);
 }
 
-/** One CSV per case: the series where there is one, else the summary. Every file is named before the first is written. */
+/** One CSV per case: the series where there is one, else the summary. Every file is named before the first is written; names that differ in case only are one on many disks. */
 async function writeCsv(directory: string, assessed: Assessed): Promise<void> {
 	const files = new Map<string, AssessedCase>();
+	const taken = new Set<string>();
 	for (const c of assessed.cases) {
 		const name = `${safe(c.id)}.${safe(c.crew)}.${safe(c.phase)}.csv`;
-		if (files.has(name)) throw new Refusal(`two cases would be written to ${name}; rename activity "${c.id}"`);
+		if (taken.has(name.toLowerCase())) throw new Refusal(`two cases would be written to ${name}; rename activity "${c.id}"`);
+		taken.add(name.toLowerCase());
 		files.set(name, c);
 	}
 	try {

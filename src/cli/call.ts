@@ -15,8 +15,11 @@ export class Refusal extends Error {}
 export function only(call: Call, command: string, allowed: readonly string[], mostPositionals: number): void {
 	for (const [key, value] of Object.entries(call.options))
 		if (value !== undefined && !allowed.includes(key))
-			throw new Refusal(`${command} does not take --${key}${allowed.length ? `; expected ${allowed.map((a) => `--${a}`).join(", ")}` : ""}`);
+			throw new Refusal(
+				`${command} does not take --${key}${allowed.length ? `; expected ${allowed.map((a) => `--${a}`).join(", ")}` : ""}`,
+			);
 	if (call.positionals.length > mostPositionals)
-		throw new Refusal(`${command} takes at most ${mostPositionals} argument${mostPositionals === 1 ? "" : "s"}, got ${call.positionals.length}`);
+		throw new Refusal(
+			`${command} takes at most ${mostPositionals} argument${mostPositionals === 1 ? "" : "s"}, got ${call.positionals.length}`,
+		);
 }
-

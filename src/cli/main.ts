@@ -1,8 +1,9 @@
 import { parseArgs } from "node:util";
 import { assessCommand } from "./assess.ts";
-import { newCommand } from "./new.ts";
-import { schemaCommand } from "./schema.ts";
 import { type Call, Refusal } from "./call.ts";
+import { newCommand } from "./new.ts";
+import { print } from "./print.ts";
+import { schemaCommand } from "./schema.ts";
 import { TOOL_VERSION } from "./version.ts";
 
 const USAGE = `offplumb: what a spinning habitat does to crew activities
@@ -39,15 +40,15 @@ export async function main(argv: readonly string[]): Promise<number> {
 			},
 		});
 		const [name, ...rest] = positionals;
-		if (values.help || (name === undefined && !values.version)) {
-			(values.help ? process.stdout : process.stderr).write(USAGE);
-			return values.help ? 0 : 2;
-		}
-		if (values.version) {
-			process.stdout.write(`${TOOL_VERSION}\n`);
+		if (values.help || values.version) {
+			await print(values.help ? USAGE : `${TOOL_VERSION}\n`);
 			return 0;
 		}
-		const command = Object.hasOwn(COMMANDS, name as string) ? COMMANDS[name as string] : undefined;
+		if (name === undefined) {
+			process.stderr.write(USAGE);
+			return 2;
+		}
+		const command = Object.hasOwn(COMMANDS, name) ? COMMANDS[name] : undefined;
 		if (!command) throw new Refusal(`"${name}" is not a command; expected ${Object.keys(COMMANDS).join(", ")}`);
 		return await command({ positionals: rest, options: values });
 	} catch (error) {
@@ -55,6 +56,8 @@ export async function main(argv: readonly string[]): Promise<number> {
 			process.stderr.write(`offplumb: ${error.message}\n`);
 			return 2;
 		}
-		throw error;
+		// A defect of the tool is not "something outside", which is what Node's own status for it would say.
+		process.stderr.write(`offplumb: the tool failed; nothing was assessed\n${error instanceof Error ? error.stack : String(error)}\n`);
+		return 2;
 	}
 }

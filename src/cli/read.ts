@@ -7,15 +7,17 @@ import { Refusal } from "./call.ts";
 
 /** The layout in a file, or on standard input for "-"; refused with every problem found. Reads no further than the largest file allowed. */
 export async function readLayout(path: string): Promise<LayoutFile> {
-	const decoded = decodeLayout(await readBytes(path));
+	const name = path === "-" ? "standard input" : path;
+	const decoded = decodeLayout(await readBytes(path, name));
 	const result: ParseResult = decoded.ok ? parseLayout(decoded.text) : { ok: false, problems: decoded.problems };
 	if (result.ok) return result.layout;
 	const n = result.problems.length;
-	const name = path === "-" ? "standard input" : path;
-	throw new Refusal([`${name} is no layout: ${n} problem${n === 1 ? "" : "s"}`, ...result.problems.map((p) => `  ${problemLine(p)}`)].join("\n"));
+	throw new Refusal(
+		[`${name} is no layout: ${n} problem${n === 1 ? "" : "s"}`, ...result.problems.map((p) => `  ${problemLine(p)}`)].join("\n"),
+	);
 }
 
-async function readBytes(path: string): Promise<Uint8Array> {
+async function readBytes(path: string, name: string): Promise<Uint8Array> {
 	const stream = path === "-" ? process.stdin : createReadStream(path, { end: MOST_BYTES });
 	const chunks: Buffer[] = [];
 	let size = 0;
@@ -23,10 +25,10 @@ async function readBytes(path: string): Promise<Uint8Array> {
 		for await (const chunk of stream) {
 			chunks.push(chunk as Buffer);
 			size += (chunk as Buffer).length;
-			if (size > MOST_BYTES) break;
+			if (size > MOST_BYTES) throw new Refusal(`${name} is no layout: it is longer than ${MOST_BYTES} bytes`);
 		}
 	} catch (error) {
-		if (error instanceof Error && "code" in error) throw new Refusal(`${path} cannot be read: ${error.message}`);
+		if (error instanceof Error && "code" in error) throw new Refusal(`${name} cannot be read: ${error.message}`);
 		throw error;
 	}
 	return Buffer.concat(chunks);
