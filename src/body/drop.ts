@@ -1,12 +1,12 @@
 import { radFromDeg } from "../quantity/convert.ts";
-import { chestBow, gazePivot, lookDirection, placeAboveChest, turnEyes, turnHead } from "./gaze.ts";
+import type { Floor } from "./floor.ts";
+import { chestBow, gazePivot, lookDirection, turnEyes, turnHead } from "./gaze.ts";
 import { gripPoint, setHand } from "./hand.ts";
-import { placeAll } from "./kinematics.ts";
+import { placeAll, placeFromChest } from "./kinematics.ts";
 import { solveArm } from "./limb.ts";
 import { copyPose, createPose, type Pose } from "./pose.ts";
 import { type Hand, palmDirection, palmPoint, poseStandingReach, sideOf } from "./reach.ts";
 import { limb, type Side, trunk } from "./skeleton.ts";
-import type { Floor } from "./stand.ts";
 
 /** Writes the middle of the released body at t ≥ 0 s after release, stance frame, m. */
 export type Track = (t: number, out: Float64Array) => void;
@@ -119,7 +119,7 @@ export function dropPose(person: Dropper, t: number, out: Pose): void {
 	lookDirection(pivot, target, lowest, direction);
 	const thorax = 3 * trunk("thorax");
 	out.angle[thorax] = (held.angle[thorax] as number) + chestBow(direction) - person.bow;
-	placeAboveChest(out);
+	placeFromChest(out);
 	turnHead(out, direction);
 	pursued(track, t, EYE_LAG, target);
 	turnEyes(out, target, lowest);

@@ -3,7 +3,7 @@ import { directionInto, place, pointAt } from "./kinematics.ts";
 import type { Pose } from "./pose.ts";
 import { type Axis, JOINT } from "./ranges.ts";
 import { fraction } from "./segments.ts";
-import { limb, SIDES, trunk } from "./skeleton.ts";
+import { trunk } from "./skeleton.ts";
 
 /** How far head and eyes go, rad. The head's share of a gaze shift saturates smoothly; the eyes take the rest. */
 export const GAZE = {
@@ -159,12 +159,4 @@ export function eyePoint(pose: Pose, out: EyePoint): void {
 /** Writes the middle of the head, m. */
 export function headCentre(pose: Pose, out: Float64Array): void {
 	pointAt(pose, trunk("head"), 0, 0.03 * pose.stature, 0, out);
-}
-
-/** Places what hangs on a trunk segment that was turned: neck, head and both arms. */
-export function placeAboveChest(pose: Pose): void {
-	place(pose, trunk("thorax"));
-	place(pose, trunk("neck"));
-	place(pose, trunk("head"));
-	for (const side of SIDES) for (let i = limb(side, "collar"); i <= limb(side, "thumbTip"); i++) place(pose, i);
 }

@@ -1,5 +1,5 @@
 import type { Pose } from "./pose.ts";
-import { SEGMENT_COUNT, SEGMENTS, type SegmentSpec } from "./skeleton.ts";
+import { limb, SEGMENT_COUNT, SEGMENTS, type SegmentSpec, SIDES, trunk } from "./skeleton.ts";
 
 type Out = Float64Array;
 
@@ -51,6 +51,12 @@ export function place(pose: Pose, segment: number): void {
 /** Forward kinematics of the whole body. */
 export function placeAll(pose: Pose): void {
 	for (let i = 0; i < SEGMENT_COUNT; i++) place(pose, i);
+}
+
+/** The same from the chest up: chest, neck, head and both arms. */
+export function placeFromChest(pose: Pose): void {
+	for (let i = trunk("thorax"); i <= trunk("head"); i++) place(pose, i);
+	for (const side of SIDES) for (let i = limb(side, "collar"); i <= limb(side, "thumbTip"); i++) place(pose, i);
 }
 
 function put(m: Out, at: number, x: number, y: number, z: number): void {

@@ -1,10 +1,11 @@
 import { radFromDeg } from "../quantity/convert.ts";
+import { type Floor, LEVEL } from "./floor.ts";
 import { gazePivot, lookDirection, turnEyes, turnHead } from "./gaze.ts";
 import { gripPoint, RELAXED_CURL, setHand } from "./hand.ts";
 import { placeAll, pointAt } from "./kinematics.ts";
 import { createPose, type Pose } from "./pose.ts";
 import { LEFT, limb, outward, RIGHT, type Side } from "./skeleton.ts";
-import { type Floor, LEVEL, solveStanding, standingFeet } from "./stand.ts";
+import { solveStanding, standingFeet } from "./stand.ts";
 
 export type Hand = "right" | "left";
 export const sideOf = (hand: Hand): Side => (hand === "right" ? RIGHT : LEFT);

@@ -1,15 +1,12 @@
 import { radFromDeg } from "../quantity/convert.ts";
 import { massCentre } from "./balance.ts";
+import type { Floor } from "./floor.ts";
 import { place, placeAll, pointAt } from "./kinematics.ts";
 import { leastSquares } from "./least-squares.ts";
 import { type Foothold, solveArm, solveLeg } from "./limb.ts";
 import type { Pose } from "./pose.ts";
 import { fraction } from "./segments.ts";
-import { LENGTH, limb, outward, SIDES, type Side, trunk } from "./skeleton.ts";
-
-/** Height of the floor under a stance point, m. */
-export type Floor = (forward: number, right: number) => number;
-export const LEVEL: Floor = () => 0;
+import { LEFT, LENGTH, limb, outward, RIGHT, SIDES, type Side, trunk } from "./skeleton.ts";
 
 /** What a standing person does with one hand; vectors in the stance frame. */
 export interface StandingTask {
@@ -60,72 +57,84 @@ const BASE = {
 	shoulders: radFromDeg(-8),
 } as const;
 
-/** Parameters of the search: metres are × stature; one row each: name, ease (what costs as much as one residual). */
-const PARAMETER = ["ahead", "aside", "crouch", "tilt", "drop", "turn", "flexion", "bend", "twist", "protract", "elevate"] as const;
-const EASE = [0.1, 0.02, 0.035, 0.3, 0.05, 0.12, 0.35, 0.1, 0.2, 0.14, 0.12] as const;
-/** How far each angle goes however hard it is pulled, rad; the joints' ranges hold within it. */
-const MOST = {
-	tilt: [-0.2, 1.2],
-	drop: 0.2,
-	turn: 0.6,
-	flexion: [-0.22, 1.05],
-	bend: 0.4,
-	twist: 0.55,
-	protract: [-0.2, 0.36],
-	elevate: [-0.03, 0.6],
-} as const;
-const RESIDUALS = PARAMETER.length + 11;
+/**
+ * What the search moves. `ease` is what costs as much as one residual, `back` the same below zero;
+ * `least` and `most` are where an angle levels off, within the joints' ranges.
+ */
+interface Parameter {
+	readonly ease: number;
+	readonly back?: number;
+	readonly least: number;
+	readonly most: number;
+}
+const PARAMETER = {
+	/** The pelvis, × stature: forward, towards the hand's side, down. A straight leg does not lengthen. */
+	ahead: { ease: 0.1, least: -1, most: 1 },
+	aside: { ease: 0.02, least: -1, most: 1 },
+	crouch: { ease: 0.035, back: 0.002, least: -1, most: 1 },
+	/** rad: pelvis; chest (lumbar and thoracic together); collar bone. Nobody leans back to reach. */
+	tilt: { ease: 0.3, back: 0.05, least: -0.2, most: 1.2 },
+	drop: { ease: 0.05, least: -0.2, most: 0.2 },
+	turn: { ease: 0.12, least: -0.6, most: 0.6 },
+	flexion: { ease: 0.35, back: 0.1, least: -0.22, most: 1.05 },
+	bend: { ease: 0.1, least: -0.4, most: 0.4 },
+	twist: { ease: 0.2, least: -0.55, most: 0.55 },
+	protract: { ease: 0.14, least: -0.2, most: 0.36 },
+	elevate: { ease: 0.12, back: 0.03, least: -0.03, most: 0.6 },
+} as const satisfies Record<string, Parameter>;
+type ParameterName = keyof typeof PARAMETER;
+const NAMES = Object.keys(PARAMETER) as ParameterName[];
+const ROWS: readonly Parameter[] = Object.values(PARAMETER);
+const RESIDUALS = NAMES.length + 11;
 
-/** The identity near zero, levelling off at both ends. */
-const held = (x: number, least: number, most: number): number => (x < 0 ? least * Math.tanh(x / least) : most * Math.tanh(x / most));
+/** A parameter's value: itself near zero, levelling off at both ends. */
+function levelOf(p: Float64Array, name: ParameterName): number {
+	const { least, most } = PARAMETER[name];
+	const x = p[NAMES.indexOf(name)] as number;
+	return x < 0 ? least * Math.tanh(x / least) : most * Math.tanh(x / most);
+}
+
+/** Grows from zero in proportion once x is positive; smooth. */
 const soft = (x: number): number => (x > 30 ? x : Math.log1p(Math.exp(x)));
 const shoulder = new Float64Array(3);
 const centre = new Float64Array(3);
 
-/** What both legs were short of the floor at the last `take`, m. */
-let lift = 0;
+/** What hand and feet are short of, m. */
+interface Shortfall {
+	hand: number;
+	feet: number;
+}
 
-/** Sets every angle of the body for the parameters `p` and places all of it; returns what the hand is short of, m. */
-function take(pose: Pose, task: StandingTask, p: ArrayLike<number>): number {
+/** Sets every angle of the body for the parameters `p` and places all of it. */
+function take(pose: Pose, task: StandingTask, p: Float64Array, short: Shortfall): void {
 	const H = pose.stature;
 	const { angle, root } = pose;
 	const m = outward(task.side);
-	const [ahead, aside, crouch, tilt, drop, turn, flexion, bend, twist, protract, elevate] = p as unknown as number[] as [
-		number,
-		number,
-		number,
-		number,
-		number,
-		number,
-		number,
-		number,
-		number,
-		number,
-		number,
-	];
 	const set = (segment: number, z: number, x: number, y: number) => {
 		angle[3 * segment] = z;
 		angle[3 * segment + 1] = x;
 		angle[3 * segment + 2] = y;
 	};
-	const tip = BASE.tilt + held(tilt, ...MOST.tilt);
-	set(trunk("pelvis"), tip, m * (BASE.drop + held(drop, -MOST.drop, MOST.drop)), m * held(turn, -MOST.turn, MOST.turn));
-	const flex = BASE.flexion + held(flexion, ...MOST.flexion);
-	const lean = m * (BASE.bend + held(bend, -MOST.bend, MOST.bend));
-	const turned = m * held(twist, -MOST.twist, MOST.twist);
-	set(trunk("abdomen"), flex * 0.45, lean * 0.5, turned * 0.2);
-	set(trunk("thorax"), flex * 0.55, lean * 0.5, turned * 0.8);
-	set(limb(task.side, "collar"), 0, BASE.shoulders + held(elevate, ...MOST.elevate), held(protract, ...MOST.protract));
-	root[0] = ahead * H;
+	const tilt = BASE.tilt + levelOf(p, "tilt");
+	const drop = m * (BASE.drop + levelOf(p, "drop"));
+	const flexion = BASE.flexion + levelOf(p, "flexion");
+	const bend = m * (BASE.bend + levelOf(p, "bend"));
+	const twist = m * levelOf(p, "twist");
+	const crouch = levelOf(p, "crouch");
+	set(trunk("pelvis"), tilt, drop, m * levelOf(p, "turn"));
+	set(trunk("abdomen"), flexion * 0.45, bend * 0.5, twist * 0.2);
+	set(trunk("thorax"), flexion * 0.55, bend * 0.5, twist * 0.8);
+	set(limb(task.side, "collar"), 0, BASE.shoulders + levelOf(p, "elevate"), levelOf(p, "protract"));
+	hangArm(pose, task.side === RIGHT ? LEFT : RIGHT, flexion + tilt, -m * (bend + drop), crouch);
+	root[0] = levelOf(p, "ahead") * H;
 	root[1] = 0;
-	root[2] = m * aside * H;
+	root[2] = m * levelOf(p, "aside") * H;
 	place(pose, trunk("pelvis"));
 	root[1] = hipHeight(pose, task.feet) - crouch * H;
-	hangArm(pose, task.side === 0 ? 1 : 0, flex + tip, -m * (lean + (angle[3 * trunk("pelvis") + 1] as number)), crouch);
 	placeAll(pose);
-	lift = 0;
-	for (const side of SIDES) lift += solveLeg(pose, side, task.feet[side]);
-	return solveArm(pose, task.side, task.target, task.grip, task.palm);
+	short.feet = 0;
+	for (const side of SIDES) short.feet += solveLeg(pose, side, task.feet[side]);
+	short.hand = solveArm(pose, task.side, task.target, task.grip, task.palm);
 }
 
 /** Height of the pelvis over straight but soft legs; the shorter way decides, smoothly. */
@@ -172,36 +181,36 @@ export function solveStanding(pose: Pose, task: StandingTask): number {
 	const m = outward(task.side);
 	const reach = (LENGTH.upperArm + LENGTH.forearm + 0.036) * H;
 	const { angle } = pose;
-	const p = new Float64Array(PARAMETER.length);
+	const short: Shortfall = { hand: 0, feet: 0 };
+	const over = (side: Side, name: "thigh" | "shank" | "foot", limitDeg: number, easeDeg: number): number =>
+		soft(((angle[3 * limb(side, name)] as number) - radFromDeg(limitDeg)) / radFromDeg(easeDeg));
 	const residuals = (q: Float64Array, r: Float64Array): void => {
-		const gap = take(pose, task, q);
+		take(pose, task, q, short);
+		ROWS.forEach(({ ease, back = ease }, i) => {
+			const x = q[i] as number;
+			r[i] = x / (x < 0 ? back : ease);
+		});
+		let i = ROWS.length;
 		massCentre(pose, centre);
-		let i = 0;
-		for (; i < PARAMETER.length; i++) r[i] = (q[i] as number) / (EASE[i] as number);
-		// a straight leg does not lengthen, a standing person does not lean back or bend backwards to reach
-		if ((q[2] as number) < 0) r[2] = (q[2] as number) / 0.002;
-		if ((q[3] as number) < 0) r[3] = (q[3] as number) / 0.05;
-		if ((q[6] as number) < 0) r[6] = (q[6] as number) / 0.1;
-		if ((q[10] as number) < 0) r[10] = (q[10] as number) / 0.03;
 		r[i++] = ((centre[0] as number) / H - BASE.weightAhead) / 0.008;
 		r[i++] = ((m * (centre[2] as number)) / H + BASE.weightAside) / 0.008;
 		pointAt(pose, limb(task.side, "upperArm"), 0, 0, 0, shoulder);
 		const dx = (task.target[0] as number) - (shoulder[0] as number);
 		const dy = (task.target[1] as number) - (shoulder[1] as number);
 		const dz = (task.target[2] as number) - (shoulder[2] as number);
-		const far = (Math.hypot(dx, dy, dz) / reach - 0.945) / 0.018;
-		r[i++] = 0.9 * soft(far) + (100 * gap) / H;
+		r[i++] = 0.9 * soft((Math.hypot(dx, dy, dz) / reach - 0.945) / 0.018) + (100 * short.hand) / H;
 		// a hand that goes across the chest or behind it turns the body
 		r[i++] = 0.6 * soft((-m * dz - 0.35 * dx) / (0.05 * H)) + 0.6 * soft(-dx / (0.05 * H));
-		r[i++] = (500 * lift) / H;
-		for (const side of SIDES) r[i++] = soft(((angle[3 * limb(side, "foot")] as number) - radFromDeg(27)) / radFromDeg(2));
+		r[i++] = (500 * short.feet) / H;
 		for (const side of SIDES) {
-			r[i++] = soft(((angle[3 * limb(side, "thigh")] as number) - radFromDeg(108)) / radFromDeg(3));
-			r[i++] = soft(((angle[3 * limb(side, "shank")] as number) - radFromDeg(125)) / radFromDeg(3));
+			r[i++] = over(side, "thigh", 108, 3);
+			r[i++] = over(side, "shank", 125, 3);
+			r[i++] = over(side, "foot", 27, 2);
 		}
 	};
+	const p = new Float64Array(ROWS.length);
 	leastSquares(residuals, p, RESIDUALS, 60);
-	const gap = take(pose, task, p);
+	take(pose, task, p, short);
 	placeAll(pose);
-	return gap;
+	return short.hand;
 }

@@ -49,6 +49,8 @@ function facesAt({ position, index }: Surface): number[][] {
 	return out;
 }
 
+type Span = readonly [least: number, most: number];
+
 /**
  * Blends `a` where it comes near to or inside `b`. The distance to `b` is that to the planes of the
  * triangles at its nearest vertex: exact enough on these convex, evenly meshed skins.
@@ -56,10 +58,21 @@ function facesAt({ position, index }: Surface): number[][] {
 function meet(a: Surface, b: Surface, faces: readonly number[][], shift: readonly number[], stature: number, out: Float32Array): void {
 	const at = (v: ArrayLike<number>, i: number) => v[i] as number;
 	const depth = DEPTH * stature;
+	const far = 3 * depth;
+	const box = [0, 1, 2].map((k) => {
+		let [least, most] = [Number.POSITIVE_INFINITY, Number.NEGATIVE_INFINITY];
+		for (let j = k; j < b.position.length; j += 3) {
+			least = Math.min(least, at(b.position, j));
+			most = Math.max(most, at(b.position, j));
+		}
+		return [least - far, most + far] as const;
+	}) as unknown as readonly [Span, Span, Span];
+	const within = (v: number, [least, most]: Span) => v >= least && v <= most;
 	for (let i = 0; i < a.position.length; i += 3) {
 		const x = at(a.position, i) + at(shift, 0);
 		const y = at(a.position, i + 1) + at(shift, 1);
 		const z = at(a.position, i + 2) + at(shift, 2);
+		if (!within(x, box[0]) || !within(y, box[1]) || !within(z, box[2])) continue;
 		let nearest = 0;
 		let least = Number.POSITIVE_INFINITY;
 		for (let j = 0; j < b.position.length; j += 3) {
@@ -72,7 +85,7 @@ function meet(a: Surface, b: Surface, faces: readonly number[][], shift: readonl
 				nearest = j;
 			}
 		}
-		if (least > 9 * depth * depth) continue;
+		if (least > far * far) continue;
 		const planes = faces[nearest / 3] as number[];
 		let outside = Number.NEGATIVE_INFINITY;
 		for (let f = 0; f < planes.length; f += 3)

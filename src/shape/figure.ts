@@ -1,10 +1,13 @@
 import type { Pose } from "../body/pose.ts";
 import { LEFT, SEGMENTS } from "../body/skeleton.ts";
+import { deckTriad, placeOnDeck } from "../layout/habitat.ts";
+import { add, scale } from "../vector/vec3.ts";
 import type { Part, Triangles } from "./drawable.ts";
 import { addLoft, normalsOf, type Skin } from "./figure-loft.ts";
 import { BUILD } from "./figure-profile.ts";
 import { blendedNormals } from "./figure-seam.ts";
 import { COLOUR } from "./palette.ts";
+import { directionToStage, type StageFrame, toStage } from "./stage-frame.ts";
 
 /** How far the ink hull stands out from the skin, m: its width as a silhouette line. */
 const INK = 0.0035;
@@ -31,7 +34,8 @@ export function createFigure(stature: number): Figure {
 	const built = SEGMENTS.map(({ name, side }) => {
 		const skin: Skin = { position: [], colour: [], index: [], inked: [] };
 		for (const loft of BUILD[name]) addLoft(skin, loft, stature, side === LEFT);
-		return { ...skin, normal: normalsOf(skin.position, skin.index) };
+		const position = new Float32Array(skin.position);
+		return { ...skin, position, normal: normalsOf(position, skin.index) };
 	});
 	const shading = blendedNormals(built, stature);
 	SEGMENTS.forEach(({ name, side }, i) => {
@@ -42,7 +46,7 @@ export function createFigure(stature: number): Figure {
 		const body: Triangles = {
 			...common,
 			name: `crew-${label}`,
-			position: new Float32Array(skin.position),
+			position: skin.position,
 			normal: shading[i] as Float32Array,
 			colour: new Uint8Array(skin.colour),
 			side: "front",
@@ -87,18 +91,30 @@ export function updateFigure(figure: Figure, pose: Pose, stanceToStage: ArrayLik
 	}
 }
 
-/** Writes the stance-to-stage transform of a person at stage point (x, y, z) facing heading χ (rad). */
+/** Writes the stance-to-stage transform of a person at stage point (x, y, z), upright there, facing heading χ (rad). */
 export function stanceToStage(x: number, y: number, z: number, facing: number, out: Float32Array): void {
 	const c = Math.cos(facing);
 	const s = Math.sin(facing);
+	out.set([c, 0, s, 0, 0, 1, 0, 0, -s, 0, c, 0, x, y, z, 1]);
+}
+
+/** The same for a person on the frame's deck at floor angle `angle` (rad) and `axial` (m): upright where they stand. */
+export function standOnDeck(frame: StageFrame, angle: number, axial: number, facing: number, out: Float32Array): void {
+	const { prograde, up, axial: along } = deckTriad(frame.deck, angle);
+	const c = Math.cos(facing);
+	const s = Math.sin(facing);
 	out.fill(0);
-	out[0] = c;
-	out[2] = s;
-	out[5] = 1;
-	out[8] = -s;
-	out[10] = c;
-	out[12] = x;
-	out[13] = y;
-	out[14] = z;
+	directionToStage(frame, add(scale(prograde, c), scale(along, s)), out, 0);
+	directionToStage(frame, up, out, 4);
+	directionToStage(frame, add(scale(prograde, -s), scale(along, c)), out, 8);
+	toStage(frame, placeOnDeck(frame.deck, angle, axial, 0), out, 12);
 	out[15] = 1;
+}
+
+/** Writes the stance coordinates of a stage point, the inverse of a stance-to-stage transform. */
+export function stageToStance(m: ArrayLike<number>, x: number, y: number, z: number, out: Float64Array): void {
+	const dx = x - (m[12] as number);
+	const dy = y - (m[13] as number);
+	const dz = z - (m[14] as number);
+	for (let c = 0; c < 3; c++) out[c] = (m[4 * c] as number) * dx + (m[4 * c + 1] as number) * dy + (m[4 * c + 2] as number) * dz;
 }

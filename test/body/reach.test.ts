@@ -1,6 +1,7 @@
 import fc from "fast-check";
 import { describe, expect, it } from "vitest";
 import { soleCorners, supportMargin } from "../../src/body/balance.ts";
+import { deckFloor } from "../../src/body/floor.ts";
 import { eyeMidpoint } from "../../src/body/gaze.ts";
 import { gripPoint } from "../../src/body/hand.ts";
 import { placeAll } from "../../src/body/kinematics.ts";
@@ -11,6 +12,7 @@ import { JOINT } from "../../src/body/ranges.ts";
 import { defaultFeet, palmPoint, poseStandingReach } from "../../src/body/reach.ts";
 import { fraction } from "../../src/body/segments.ts";
 import { LEFT, limb, outward, RIGHT, SEGMENT_COUNT, SIDES } from "../../src/body/skeleton.ts";
+import type { Deck } from "../../src/layout/habitat.ts";
 import { outOfRange, overlap } from "./support.ts";
 
 const SEED = 20240611;
@@ -154,6 +156,29 @@ describe("standing and reaching", () => {
 		for (const [x] of soleCorners(pose)) expect(Number.isFinite(x)).toBe(true);
 		const o = 16 * limb(RIGHT, "foot");
 		expect((pose.world[o + 1] as number) / (pose.world[o] as number)).toBeCloseTo(0.05, 2);
+	});
+
+	it("finds the floor of a curved deck risen before and behind along the ring, of a flat one level", () => {
+		const deck = { floor: "curved", radius: 10 } as Deck;
+		expect(deckFloor(deck, 0)(1, 5)).toBeCloseTo(10 - Math.sqrt(99), 12);
+		expect(deckFloor(deck, Math.PI / 2)(5, -1)).toBeCloseTo(10 - Math.sqrt(99), 12);
+		expect(deckFloor({ ...deck, floor: "flat" }, 0)(1, 5)).toBe(0);
+	});
+
+	it("turns the palm up to throw upward and down to let go", () => {
+		const palmUp = (velocity: readonly [number, number, number]) => {
+			const pose = poseStandingReach({
+				stature: 1.75,
+				handTarget: [0.4, 1.15, 0.2],
+				gazeTarget: [3, 1.5, 0],
+				holding: 0.06,
+				hand: "right",
+				velocity,
+			});
+			return -(pose.world[16 * limb(RIGHT, "hand") + 9] as number);
+		};
+		expect(palmUp([0, 0, 0])).toBeLessThan(-0.5);
+		expect(palmUp([1, 3, 0])).toBeGreaterThan(0.5);
 	});
 
 	it("refuses a target that is not finite", () => {

@@ -3,9 +3,12 @@ import { placeAll } from "../../src/body/kinematics.ts";
 import { createPose } from "../../src/body/pose.ts";
 import { fraction } from "../../src/body/segments.ts";
 import { LEFT, limb, RIGHT, SEGMENT_COUNT, SEGMENTS } from "../../src/body/skeleton.ts";
+import { type Deck, deckTriad, heightAbove, placeOnDeck } from "../../src/layout/habitat.ts";
 import type { Part, Triangles } from "../../src/shape/drawable.ts";
-import { createFigure, stanceToStage, updateFigure } from "../../src/shape/figure.ts";
+import { createFigure, stageToStance, stanceToStage, standOnDeck, updateFigure } from "../../src/shape/figure.ts";
 import { COLOUR } from "../../src/shape/palette.ts";
+import { fromStage, stageFrame } from "../../src/shape/stage-frame.ts";
+import { dot, sub } from "../../src/vector/vec3.ts";
 
 const STATURE = 1.75;
 const figure = createFigure(STATURE);
@@ -140,6 +143,36 @@ describe("the crew figure", () => {
 		expect(forward[2]).toBeCloseTo(1, 6);
 		expect(figure.matrices[limb(RIGHT, "hand")]).toBe(hand(RIGHT));
 		expect((figure.parts[SEGMENT_COUNT + limb(RIGHT, "hand")] as Part).matrix).toBe(hand(RIGHT));
+	});
+
+	it.each(["curved", "flat"] as const)("stands upright on a %s deck away from the stage's origin, and back", (floor) => {
+		const deck: Deck = {
+			index: 0,
+			id: "d",
+			name: "d",
+			floor,
+			radius: 20,
+			headroom: 2.4,
+			middle: 0.1,
+			closed: false,
+			from: -0.5,
+			to: 0.7,
+			axialFrom: -4,
+			axialTo: 4,
+			walkways: [],
+		};
+		const frame = stageFrame(deck, 0.1, 1);
+		const m = new Float32Array(16);
+		standOnDeck(frame, 0.25, -0.5, 0.6, m);
+		const head = [0, 1, 2].map((k) => 1.6 * (m[4 + k] as number) + (m[12 + k] as number)) as [number, number, number];
+		expect(heightAbove(deck, fromStage(frame, ...head))).toBeCloseTo(1.6, 5);
+		const ahead = fromStage(frame, ...([0, 1, 2].map((k) => 1e-3 * (m[k] as number) + (m[12 + k] as number)) as [number, number, number]));
+		const triad = deckTriad(deck, 0.25);
+		const moved = sub(ahead, placeOnDeck(deck, 0.25, -0.5, 0));
+		expect(Math.atan2(moved[2], dot(moved, triad.prograde))).toBeCloseTo(0.6, 3);
+		const back = new Float64Array(3);
+		stageToStance(m, ...head, back);
+		expect([...back].map((v) => Math.round(v * 1e5) / 1e5 + 0)).toEqual([0, 1.6, 0]);
 	});
 
 	it("leaves head and neck out of the view through one's own eyes, and the ink of what is near to them", () => {
