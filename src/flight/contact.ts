@@ -41,10 +41,11 @@ export function firstContact(stretch: Stretch, surfaces: readonly Surface[], fro
 	let aimed: Surface | null = null;
 	for (let guard = 0; guard < 1_000_000; guard++) {
 		path.stateAt(t, state);
-		const radius = Math.hypot(state[0] as number, state[1] as number);
+		const radius = Math.sqrt(state[0]! * state[0]! + state[1]! * state[1]!);
 		const pace = stretch.inertialSpeed + spin.greatestRate * radius;
-		const horizon = Math.min(to - t, pace > 0 ? (0.25 * Math.max(radius, 0.1)) / pace : Number.POSITIVE_INFINITY);
-		ringBounds(spin, radius, stretch.inertialSpeed, stretch.inertialAcceleration, Number.isFinite(horizon) ? horizon : 0, bounds);
+		const horizon = Math.min(to - t, pace > 0 ? Math.max(radius, 0.1) / pace : Number.POSITIVE_INFINITY);
+		const speed = Math.sqrt(state[3]! * state[3]! + state[4]! * state[4]! + state[5]! * state[5]!);
+		ringBounds(spin, radius, speed, stretch.inertialSpeed, stretch.inertialAcceleration, Number.isFinite(horizon) ? horizon : 0, bounds);
 		let step = horizon;
 		let nearest: Surface | null = null;
 		for (let i = 0; i < surfaces.length; i++) {

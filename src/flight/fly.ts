@@ -56,7 +56,6 @@ type Place = { readonly kind: "bay"; readonly deck: number } | { readonly kind: 
 /** The walk from bay to bay that free and dragged flight share; they differ in how the next contact is found. */
 abstract class Journey {
 	protected readonly half: number;
-	protected readonly bodies: readonly Surface[];
 	protected readonly until: number;
 	protected readonly state: State = new Float64Array(6);
 	private readonly passed: string[] = [];
@@ -69,7 +68,6 @@ abstract class Journey {
 		protected readonly release: Release,
 	) {
 		this.half = release.diameter / 2;
-		this.bodies = world.bodies.length ? bodySurfaces(world, this.half) : [];
 		this.until = longestFlight(spin.rate(0));
 	}
 
@@ -124,7 +122,7 @@ abstract class Journey {
 
 	private strike(surface: Surface, deck: number, t: number): Flight {
 		if (surface.kind === "far-end" || surface.kind === "near-end") throw new RangeError(`a shaft end was struck in deck ${deck}`);
-		if (surface.kind !== "element" && surface.kind !== "coaming") {
+		if (this.world.panes.length > 0 && surface.kind !== "element" && surface.kind !== "coaming") {
 			const own = this.world.habitat.decks[deck] as Deck;
 			const face = surface.kind === "deck" ? "floor" : surface.kind;
 			const pane = paneAt(this.world, own, face, pointTouched(own, surface.kind, this.state));
@@ -141,11 +139,11 @@ abstract class Journey {
 	/** The hatch through which a floor or ceiling contact is none, or null. */
 	private openingAt(surface: Surface, deck: number): Hatchway | null {
 		if (surface.kind !== "deck" && surface.kind !== "ceiling") return null;
-		const [x, y, z] = pointTouched(this.world.habitat.decks[deck] as Deck, surface.kind, this.state);
-		const angle = Math.atan2(y, x);
+		let point: RingVec | null = null;
 		for (const way of this.world.ways) {
-			const here = surface.kind === "deck" ? way.hatch.deck === deck : way.hatch.below === deck;
-			if (here && way.admits(angle, z)) return way;
+			if ((surface.kind === "deck" ? way.hatch.deck : way.hatch.below) !== deck) continue;
+			point ??= pointTouched(this.world.habitat.decks[deck]!, surface.kind, this.state);
+			if (way.admits(Math.atan2(point[1], point[0]), point[2])) return way;
 		}
 		return null;
 	}
@@ -153,8 +151,7 @@ abstract class Journey {
 	private surfacesOf(place: Place): readonly Surface[] {
 		const { half } = this;
 		if (place.kind === "bay") {
-			const deck = this.world.habitat.decks[place.deck] as Deck;
-			return [floorSurface(deck, half), ceilingSurface(deck, half), ...wallSurfaces(deck, half), ...this.bodies];
+			return this.world.surfaces(this.world.habitat.decks[place.deck] as Deck, half);
 		}
 		const { way, down } = place;
 		return [
@@ -163,7 +160,7 @@ abstract class Journey {
 			...way.coaming(half),
 			...wallsWithin(way.deck, half, floorSurface(way.deck, 0)),
 			...(way.below ? wallsWithin(way.below, half, ceilingSurface(way.below, 0)) : []),
-			...this.bodies,
+			...bodySurfaces(this.world.bodies, half),
 		];
 	}
 
@@ -172,29 +169,35 @@ abstract class Journey {
 	 * that it neither nears nor leaves is looked at a little later, when its acceleration has told.
 	 */
 	private touchedAt(surfaces: readonly Surface[], t: number): { readonly pressed: Surface | null; readonly leaving: Set<Surface> } {
-		const leaving = new Set<Surface>();
-		const s = this.state;
+		let leaving = NONE;
 		let pressed: Surface | null = null;
+		const s = this.state;
+		this.path.stateAt(t, s);
 		for (const surface of surfaces) {
-			this.path.stateAt(t, s);
 			const gap = surface.gap(s);
 			if (gap > TOUCHING) continue;
-			const w = this.spin.greatestRate;
-			const r = Math.hypot(s[0] as number, s[1] as number);
-			const still = stillness(Math.hypot(s[3] as number, s[4] as number, s[5] as number) + 2 * w * r);
 			let rate = surface.rate(s);
+			const pace = speedOf(s) + 2 * this.spin.greatestRate * Math.sqrt(s[0]! * s[0]! + s[1]! * s[1]!);
+			const still = stillness(pace);
 			if (Math.abs(rate) <= still) {
 				this.path.stateAt(Math.min(t + 1e-3, this.path.known), s);
 				surface.gap(s);
 				rate = surface.rate(s);
+				this.path.stateAt(t, s);
 			}
 			if (rate < -still || (gap < -INSIDE && isWall(surface))) pressed ??= surface;
-			else leaving.add(surface);
+			else {
+				if (leaving === NONE) leaving = new Set();
+				leaving.add(surface);
+			}
 		}
 		return { pressed, leaving };
 	}
 }
 
+/** Never added to. */
+const NONE = new Set<Surface>();
+const speedOf = (s: State): number => Math.sqrt(s[3]! * s[3]! + s[4]! * s[4]! + s[5]! * s[5]!);
 /** A body this far (m) inside a bulkhead or an element is not touching it but in it: it strikes there and then. */
 const INSIDE = 1e-6;
 const isWall = ({ kind }: Surface): boolean => kind === "element" || kind.startsWith("end-") || kind.startsWith("side-");
@@ -263,7 +266,7 @@ function straightRoot(path: StraightPath, surface: Surface, from: number, leavin
 	if (surface instanceof Plane) {
 		if (surface.nx !== 0 || surface.ny !== 0) return undefined;
 		const rate = surface.nz * path.uz;
-		if (!(rate < 0)) return Number.POSITIVE_INFINITY;
+		if (leaving || !(rate < 0)) return Number.POSITIVE_INFINITY;
 		return Math.max(from, (surface.nz * path.pz + surface.offset) / -rate);
 	}
 	const within = surface instanceof CylinderFromWithin;
@@ -273,7 +276,7 @@ function straightRoot(path: StraightPath, surface: Surface, from: number, leavin
 	const a = path.ux * path.ux + path.uy * path.uy;
 	if (a === 0) return Number.POSITIVE_INFINITY;
 	const b = x * path.ux + y * path.uy;
-	const r = Math.hypot(x, y);
+	const r = Math.sqrt(x * x + y * y);
 	const c = (r - surface.reach) * (r + surface.reach);
 	const root = Math.sqrt(Math.max(0, b * b - a * c));
 	if (within) {

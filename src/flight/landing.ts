@@ -33,17 +33,18 @@ export function landing(habitat: Habitat, flight: Flight, releaseDeck: Deck, rel
 	const centre = ring(s[0]!, s[1]!, s[2]!);
 	const velocity = ring(s[3]!, s[4]!, s[5]!);
 	const point = touched(deck, flight, centre);
-	const speed = Math.hypot(velocity[0], velocity[1], velocity[2]);
+	const speed = Math.sqrt(dot(velocity, velocity));
 	const from = (axis: RingVec): number | null => (speed > 0 ? Math.acos(Math.min(1, Math.max(-1, -dot(velocity, axis) / speed))) : null);
-	const angle = Math.atan2(centre[1], centre[0]);
+	const r = radiusOf(centre);
+	const fromRadial = from(ring(-centre[0] / r, -centre[1] / r, 0));
 	return {
 		point,
 		prograde: progradeOffset(deck, flight, point, releaseDeck, release, release),
 		axial: surface.kind === "end-low" || surface.kind === "end-high" ? null : clean(point[2] - release[2]),
-		radius: Math.hypot(point[0], point[1]),
+		radius: radiusOf(point),
 		speed,
-		angle: from(deckTriad(deck, angle).up),
-		angleFromRadial: from(ring(-Math.cos(angle), -Math.sin(angle), 0)),
+		angle: deck.floor === "curved" ? fromRadial : from(deckTriad(deck, 0).up),
+		angleFromRadial: fromRadial,
 	};
 }
 
@@ -94,7 +95,7 @@ function progradeOffset(deck: Deck, flight: Flight, point: RingVec, own: Deck, r
 	if (deck.floor === "flat") return clean(tangentOf(deck, point) - tangentOf(deck, below));
 	const centre = ring(flight.state[0]!, flight.state[1]!, 0);
 	const turned = flight.path.sweptAt(flight.end) + angleFrom(centre, point) - angleFrom(release, below);
-	const along = kind === "deck" || kind === "ceiling" || kind === "coaming" ? depth : Math.hypot(point[0], point[1]);
+	const along = kind === "deck" || kind === "ceiling" || kind === "coaming" ? depth : radiusOf(point);
 	return clean(along * turned);
 }
 
@@ -102,7 +103,7 @@ function progradeOffset(deck: Deck, flight: Flight, point: RingVec, own: Deck, r
 function straightDown(own: Deck, from: RingVec, deck: Deck, depth: number): RingVec | null {
 	const [c, n] = [Math.cos(deck.middle), Math.sin(deck.middle)];
 	if (own.floor === "curved") {
-		const r = Math.hypot(from[0], from[1]);
+		const r = radiusOf(from);
 		const reach = deck.floor === "curved" ? r : from[0] * c + from[1] * n;
 		return reach > 0 ? ring((from[0] * depth) / reach, (from[1] * depth) / reach, from[2]) : null;
 	}
@@ -115,6 +116,8 @@ function straightDown(own: Deck, from: RingVec, deck: Deck, depth: number): Ring
 	const turn = deck.middle - own.middle;
 	return Math.cos(turn) > 0 ? at((depth - y * Math.sin(turn)) / Math.cos(turn)) : null;
 }
+
+const radiusOf = (p: RingVec): number => Math.sqrt(p[0] * p[0] + p[1] * p[1]);
 
 /** Signed ring angle from one point to another, rad in (−π, π]. */
 const angleFrom = (a: RingVec, b: RingVec): number => Math.atan2(a[0] * b[1] - a[1] * b[0], a[0] * b[0] + a[1] * b[1]);

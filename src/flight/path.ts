@@ -21,13 +21,26 @@ export interface Bounds {
 	acceleration: number;
 }
 
-/** Bounds in the ring for a body whose inertial speed and acceleration stay below the given ones for `horizon` s. */
-export function ringBounds(spin: Spin, radius: number, inertialSpeed: number, inertialAcceleration: number, horizon: number, out: Bounds): void {
+/**
+ * Bounds in the ring, for `horizon` s, for a body now at `radius` and at `speed` in the ring whose inertial speed and
+ * acceleration stay below the given ones. The Coriolis part turns the velocity without adding to it, so the speed grows
+ * by the other parts alone.
+ */
+export function ringBounds(
+	spin: Spin,
+	radius: number,
+	speed: number,
+	inertialSpeed: number,
+	inertialAcceleration: number,
+	horizon: number,
+	out: Bounds,
+): void {
 	const w = spin.greatestRate;
 	const r = radius + inertialSpeed * horizon;
+	const push = inertialAcceleration + (w * w + spin.greatestRateDot) * r;
 	out.radius = r;
-	out.speed = inertialSpeed + w * r;
-	out.acceleration = inertialAcceleration + w * w * r + 2 * w * out.speed + spin.greatestRateDot * r;
+	out.speed = Math.min(inertialSpeed + w * r, speed + push * horizon);
+	out.acceleration = push + 2 * w * out.speed;
 }
 
 /**

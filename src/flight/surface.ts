@@ -101,7 +101,7 @@ export class HalfPlane implements Surface {
 		const turn = this.cos * y - this.sin * x;
 		const ahead = this.kind === "side-low" ? turn : -turn;
 		this.beside = along > 0 && (ahead >= 0 || Math.atan2(-ahead, along) <= this.behind);
-		return (this.beside ? ahead : Math.hypot(x, y)) - this.half;
+		return (this.beside ? ahead : Math.sqrt(x * x + y * y)) - this.half;
 	}
 	rate(s: State): number {
 		if (!this.beside) return -Math.hypot(s[3] as number, s[4] as number);

@@ -31,7 +31,7 @@ export function pointTouched(deck: Deck, face: Face, s: State): RingVec {
 /** The nearest point at `depth` from the axis, or of a flat deck in the plane at that distance. */
 function onFace(deck: Deck, depth: number, x: number, y: number, z: number): RingVec {
 	if (deck.floor === "curved") {
-		const k = depth / Math.hypot(x, y);
+		const k = depth / Math.sqrt(x * x + y * y);
 		return ring(x * k, y * k, z);
 	}
 	const c = Math.cos(deck.middle);

@@ -4,7 +4,7 @@ import { type ElementBody, elementBodies } from "../layout/solid.ts";
 import type { RingVec } from "../vector/vec3.ts";
 import { Box, Capsule } from "./convex.ts";
 import { Hatchway } from "./hatchway.ts";
-import type { Surface } from "./surface.ts";
+import { ceilingSurface, floorSurface, type Surface, wallSurfaces } from "./surface.ts";
 import { tangentOf } from "./touched.ts";
 
 /** What flies can meet in a habitat, prepared once. */
@@ -14,20 +14,33 @@ export interface World {
 	readonly bodies: readonly ElementBody[];
 	/** Windows marked solid: struck under their own name. */
 	readonly panes: readonly WindowOpening[];
+	/** What a sphere of radius `half` can meet in a deck's bay; kept for the radius asked for last. */
+	surfaces(deck: Deck, half: number): readonly Surface[];
 }
 
 export function prepareWorld(habitat: Habitat): World {
+	const bodies = elementBodies(habitat).filter((b) => b.solid);
+	let keptHalf = Number.NaN;
+	let kept: Surface[][] = [];
 	return {
 		habitat,
 		ways: habitat.hatches.map((h) => new Hatchway(habitat, h)),
-		bodies: elementBodies(habitat).filter((b) => b.solid),
+		bodies,
 		panes: habitat.windows.filter((w) => w.solid),
+		surfaces(deck, half) {
+			if (half !== keptHalf) {
+				keptHalf = half;
+				kept = [];
+			}
+			kept[deck.index] ??= [floorSurface(deck, half), ceilingSurface(deck, half), ...wallSurfaces(deck, half), ...bodySurfaces(bodies, half)];
+			return kept[deck.index]!;
+		},
 	};
 }
 
 /** The solid elements as surfaces for a sphere of radius `half`. */
-export function bodySurfaces(world: World, half: number): Surface[] {
-	return world.bodies.flatMap((body) =>
+export function bodySurfaces(bodies: World["bodies"], half: number): Surface[] {
+	return bodies.flatMap((body) =>
 		body.primitives.map((p) =>
 			p.kind === "capsule"
 				? new Capsule("element", body.id, half, p.a, p.b, p.radius)
