@@ -2,7 +2,7 @@ import { useId } from "react";
 import type { AssessedCase, Finding } from "../store/core.ts";
 import { useDocument } from "../store/document.ts";
 import { findingKey, weightiest } from "../store/findings.ts";
-import { useSelectedCase } from "../store/navigate.ts";
+import { useSelectedCase, worstCase } from "../store/navigate.ts";
 import { useSession } from "../store/session.ts";
 import { DerivationPanel } from "./DerivationPanel.tsx";
 import { Numbers } from "./Numbers.tsx";
@@ -13,6 +13,7 @@ import { consequence, headline, limitWords, nameOf, quantityWords, RESULT_WORDS 
 /** What came out: the one sentence with its number, the limit it is held against, the traces and the remaining numbers. */
 export function Result() {
 	const c = useSelectedCase();
+	const count = useDocument((s) => s.assessed.cases.filter((other) => other.id === c?.id).length);
 	const print = usePrinter();
 	if (!c)
 		return (
@@ -26,6 +27,7 @@ export function Result() {
 				{nameOf(c.id)}{" "}
 				<span>
 					{c.crew}, {c.phase}
+					{count > 1 && (worstCase(c.id) === c ? `, worst of ${count} cases` : ", not the worst case")}
 				</span>
 			</h2>
 			<Hero c={c} print={print} />

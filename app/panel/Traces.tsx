@@ -8,9 +8,9 @@ import type { Printer } from "./print.ts";
 import { useWidth } from "./useWidth.ts";
 
 const INSET = { top: 8, right: 10, bottom: 4, left: 46 };
-const HEIGHT = 80;
+const HEIGHT = 74;
 /** Room for the times, under the last plot only. */
-const TIMES = 14;
+const TIMES = 16;
 
 const ZERO = [0];
 
@@ -130,7 +130,7 @@ function Axes({ drawn, times }: { readonly drawn: Trace; readonly times: boolean
 			))}
 			{times &&
 				drawn.xTicks.map((k, i) => (
-					<text key={k.value} x={k.at} y={drawn.bottom + 14} textAnchor={k.at > drawn.right - 12 ? "end" : "middle"}>
+					<text key={k.value} x={k.at} y={drawn.bottom + 17} textAnchor={k.at > drawn.right - 12 ? "end" : "middle"}>
 						{i === drawn.xTicks.length - 1 ? `${k.label} s` : k.label}
 					</text>
 				))}

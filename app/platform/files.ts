@@ -9,6 +9,12 @@ import { newDocumentId } from "./autosave.ts";
 const EXTENSION = ".layout.json";
 const DIALOG = { extensions: [".json"], mimeTypes: ["application/json"], description: "Layout file" };
 
+/** The library that opens and saves; not needed for the first picture. */
+const library = (): Promise<typeof import("browser-fs-access")> => import("browser-fs-access");
+
+/** Fetches it ahead, so that work can be saved even when the server is gone. Rejects where it already is. */
+export const loadFiles = (): Promise<unknown> => library();
+
 const cancelled = (error: unknown): boolean => error instanceof DOMException && error.name === "AbortError";
 const reasonOf = (error: unknown): string => (error instanceof Error ? error.message : String(error));
 
@@ -38,7 +44,7 @@ export function openNew(): void {
 
 export async function pickFile(): Promise<void> {
 	try {
-		const { fileOpen } = await import("browser-fs-access");
+		const { fileOpen } = await library();
 		await openFile(await fileOpen(DIALOG));
 	} catch (error) {
 		if (!cancelled(error)) say(`The file could not be read: ${reasonOf(error)}`);
@@ -62,7 +68,7 @@ export async function saveFile(anew: boolean): Promise<void> {
 	const blob = new Blob([writeLayout(layout)], { type: "application/json" });
 	const name = file?.name ?? fileNameFor(layout.title);
 	try {
-		const { fileSave } = await import("browser-fs-access");
+		const { fileSave } = await library();
 		const handle = await fileSave(blob, { ...DIALOG, fileName: name }, anew ? null : (file?.handle ?? null));
 		markSaved(layout, { name: handle?.name ?? name, handle: handle ?? null });
 		say(handle ? `Saved to ${handle.name}.` : `Saved as ${name} among the downloads.`);
