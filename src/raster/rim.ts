@@ -11,14 +11,15 @@ const COVERED = 0.02;
 const THIN = 0.8;
 
 /**
- * Smooths the rim of a triangle along corners 0 and 1: each pixel that it passes through becomes a mix of
+ * Smooths the rim or seam of a triangle along corners 0 and 1: each pixel that it passes through becomes a mix of
  * both sides by the share of the pixel on each. `turn` is below 0 where the triangle runs
  * counter-clockwise as seen; `tone` is its place in the ramps.
  */
-export function rim(buffers: Buffers, corners: Corners, turn: -1 | 1, paint: Paint, tone: number): void {
+export function rim(buffers: Buffers, corners: Corners, turn: -1 | 1, paint: Paint, tone: number, seam: boolean): void {
 	const use = paint.depth;
 	const { opacity } = paint;
 	const { bytes } = paint.tones;
+	if (seam && use === "test" && opacity < 1) return;
 	const thin = use === "test" && opacity <= THIN;
 	const { width, height, depth, pixels } = buffers;
 	const ax = corners[0]!;
@@ -48,8 +49,10 @@ export function rim(buffers: Buffers, corners: Corners, turn: -1 | 1, paint: Pai
 		const inside = u * stepU + v * stepV;
 		const beyond = inside + out * stepV;
 		const w = wa + pu * rise;
-		if (use === "write" && (depth[inside]! < w * (1 - BULGE) || depth[inside]! > w * (1 + BULGE) || depth[beyond]! > w * (1 - BEHIND)))
-			continue;
+		if (use === "write") {
+			if (depth[inside]! < w * (1 - BULGE) || depth[inside]! > w * (1 + BULGE)) continue;
+			if (seam ? depth[beyond]! < w * (1 - BULGE) || depth[beyond]! > w * (1 + BULGE) : depth[beyond]! > w * (1 - BEHIND)) continue;
+		}
 		if (use === "test" && (depth[inside]! > w * (1 + COVERED) || depth[beyond]! > w * (1 + COVERED))) continue;
 		/** How far the rim runs beyond the border of the two pixels: below 0 through the one inside. */
 		const past = Math.abs(edge - v - 0.5) - 0.5;

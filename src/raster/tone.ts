@@ -2,8 +2,8 @@ import { LIGHT } from "../shape/light.ts";
 import { type ColourIndex, PALETTE_BYTES } from "../shape/palette.ts";
 
 /** IEC 61966-2-1: encoded 0…1 from linear 0…1, and back. */
-export const encode = (linear: number): number => (linear <= 0.0031308 ? 12.92 * linear : 1.055 * linear ** (1 / 2.4) - 0.055);
-export const decode = (encoded: number): number => (encoded <= 0.04045 ? encoded / 12.92 : ((encoded + 0.055) / 1.055) ** 2.4);
+const encode = (linear: number): number => (linear <= 0.0031308 ? 12.92 * linear : 1.055 * linear ** (1 / 2.4) - 0.055);
+const decode = (encoded: number): number => (encoded <= 0.04045 ? encoded / 12.92 : ((encoded + 0.055) / 1.055) ** 2.4);
 
 /** Steps of a colour's ramp, and how many of them make the factor 1. */
 export const RAMP = 1024;

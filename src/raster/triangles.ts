@@ -13,7 +13,7 @@ export const drawn = (length: number, each: number, part: Part | null): number =
 
 /**
  * Fills the triangles of a drawable, smooths its rims, or both one piece after the other: standing still where `part` is null, else of a part whose matrix is already in `view.part`. A rim is a side
- * across which nothing of the drawable is seen, or its other face.
+ * across which nothing of the drawable is seen, or its other face; a seam one between two colours.
  */
 export function drawTriangles(
 	buffers: Buffers,
@@ -51,11 +51,20 @@ export function drawTriangles(
 				if (own === UNSEEN) continue;
 				const n = prepared.across[k]!;
 				const other = n < 0 || 3 * n >= end ? UNSEEN : seen[n]!;
-				if (other === own || (other !== UNSEEN && n < t)) continue;
 				const first = index[3 * t]!;
+				if (other !== UNSEEN && n < t) continue;
+				const seam = other === own;
+				if (seam && colour[index[3 * n]!] === colour[first]) continue;
 				const levels = own === FRONT ? front : back;
 				if (place(view, index[k]!, index[k % 3 === 2 ? k - 2 : k + 1]!, levels, scratch))
-					rim(buffers, scratch.corners, (own === FRONT) !== mirrored ? -1 : 1, paint, RAMP * colour[first]! + Math.trunc(levels[first]!));
+					rim(
+						buffers,
+						scratch.corners,
+						(own === FRONT) !== mirrored ? -1 : 1,
+						paint,
+						RAMP * colour[first]! + Math.trunc(levels[first]!),
+						seam,
+					);
 			}
 		from = to;
 	}

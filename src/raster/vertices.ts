@@ -36,7 +36,7 @@ export const NEAR = 1;
 
 export const UNSEEN = 0;
 export const FRONT = 1;
-export const BACK = 2;
+const BACK = 2;
 
 /** Writes for the first `end` / 3 triangles whether and from which side they are seen. Throws RangeError on one that is not finite. */
 export function look(drawable: Triangles, end: number, mirrored: boolean, scratch: VertexScratch): void {

@@ -280,6 +280,26 @@ describe("what lies on what", () => {
 		}
 	});
 
+	it("the seam between two colours of a surface is a mix of both", () => {
+		const front = createCamera(Math.PI / 2);
+		const view = createRaster(64, 64);
+		for (const x of [0.2, 0.4, 0.6, 0.8])
+			for (const over of [{}, { decal: true }, { over: true }]) {
+				const left = quad([-20, -20, -32], [8 + x, -20, -32], [8 + x, 20, -32], [-20, 20, -32], COLOUR.halo, { lit: false, ...over });
+				const right = quad([8 + x, -20, -32], [20, -20, -32], [20, 20, -32], [8 + x, 20, -32], COLOUR.ink);
+				const both: Triangles = {
+					...left,
+					position: new Float32Array([...left.position, ...right.position]),
+					normal: new Float32Array([...left.normal, ...right.normal]),
+					colour: new Uint8Array([...left.colour, ...right.colour]),
+					index: Uint32Array.from({ length: 12 }, (_, k) => k),
+				};
+				view.render(scene([both]), front);
+				const ink = PALETTE_BYTES[3 * COLOUR.ink]!;
+				expect(Math.abs(view.pixels[4 * (64 * 32 + 40)]! - (ink + (255 - ink) * x))).toBeLessThanOrEqual(1);
+			}
+	});
+
 	it("a thin coat ends on the rim and leaves sharp what lies under it", () => {
 		const front = createCamera(Math.PI / 2);
 		const view = createRaster(64, 64);
