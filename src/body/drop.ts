@@ -47,8 +47,8 @@ const EYE_LAG = 0.1;
 const HELD_GAZE = radFromDeg(45);
 const FREE_GAZE = Math.PI / 2;
 const LAG_SAMPLES = 8;
-/** How the hand moves once it is empty, × stature. */
-const SINK = [-0.02, -0.05, 0] as const;
+/** How far back and down the hand goes once it is empty, and how much further from over the head, × stature. */
+const SINK = { back: 0.02, down: 0.05, more: 0.1 } as const;
 
 /** Minimum jerk from 0 to 1 (Flash & Hogan 1985), held beyond its ends. */
 export function minimumJerk(tau: number): number {
@@ -101,7 +101,9 @@ export function createDropper(drop: Drop): Dropper {
 	palmPoint(held, hand, diameter, target);
 	// the hand sinks, and follows what it throws a little
 	const follow = Math.min(0.05, (0.07 * stature) / Math.max(Math.hypot(...velocity), 1e-9));
-	for (let k = 0; k < 3; k++) target[k] = (target[k] as number) + follow * (velocity[k] as number) + (SINK[k] as number) * stature;
+	for (let k = 0; k < 3; k++) target[k] = (target[k] as number) + follow * (velocity[k] as number);
+	target[0] = (target[0] as number) - SINK.back * stature;
+	target[1] = (target[1] as number) - (SINK.down + SINK.more * minimumJerk((at[1] / stature - 0.75) / 0.35)) * stature;
 	solveArm(eased, side, target, grip, palmDirection(at[1] / stature, side, velocity));
 	return { side, diameter, track, held, eased, pivot, bow: chestBow(direction) };
 }
