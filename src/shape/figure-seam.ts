@@ -6,7 +6,7 @@ import { SEGMENTS, type SegmentSpec } from "../body/skeleton.ts";
  */
 export interface Surface {
 	/** m, in the segment's axes. */
-	readonly position: ArrayLike<number>;
+	readonly position: Float32Array;
 	readonly index: ArrayLike<number>;
 	readonly normal: Float32Array;
 }
@@ -49,55 +49,62 @@ function facesAt({ position, index }: Surface): number[][] {
 	return out;
 }
 
-type Span = readonly [least: number, most: number];
+/** The vertices of `b` near enough to any of `a` to matter, as offsets into its position. */
+function candidates(a: Float32Array, b: Float32Array, shift: readonly [number, number, number], far: number): Uint32Array {
+	const least = [Number.POSITIVE_INFINITY, Number.POSITIVE_INFINITY, Number.POSITIVE_INFINITY];
+	const most = [Number.NEGATIVE_INFINITY, Number.NEGATIVE_INFINITY, Number.NEGATIVE_INFINITY];
+	for (let i = 0; i < a.length; i++) {
+		const v = (a[i] as number) + shift[(i % 3) as 0 | 1 | 2];
+		least[i % 3] = Math.min(least[i % 3] as number, v - far);
+		most[i % 3] = Math.max(most[i % 3] as number, v + far);
+	}
+	const out: number[] = [];
+	for (let j = 0; j < b.length; j += 3)
+		if ([0, 1, 2].every((k) => (b[j + k] as number) >= (least[k] as number) && (b[j + k] as number) <= (most[k] as number))) out.push(j);
+	return new Uint32Array(out);
+}
 
 /**
  * Blends `a` where it comes near to or inside `b`. The distance to `b` is that to the planes of the
  * triangles at its nearest vertex: exact enough on these convex, evenly meshed skins.
  */
-function meet(a: Surface, b: Surface, faces: readonly number[][], shift: readonly number[], stature: number, out: Float32Array): void {
-	const at = (v: ArrayLike<number>, i: number) => v[i] as number;
-	const depth = DEPTH * stature;
+function meet(
+	a: Surface,
+	b: Surface,
+	faces: readonly number[][],
+	shift: readonly [number, number, number],
+	depth: number,
+	out: Float32Array,
+): void {
+	const [p, q] = [a.position, b.position];
 	const far = 3 * depth;
-	const box = [0, 1, 2].map((k) => {
-		let [least, most] = [Number.POSITIVE_INFINITY, Number.NEGATIVE_INFINITY];
-		for (let j = k; j < b.position.length; j += 3) {
-			least = Math.min(least, at(b.position, j));
-			most = Math.max(most, at(b.position, j));
-		}
-		return [least - far, most + far] as const;
-	}) as unknown as readonly [Span, Span, Span];
-	const within = (v: number, [least, most]: Span) => v >= least && v <= most;
-	for (let i = 0; i < a.position.length; i += 3) {
-		const x = at(a.position, i) + at(shift, 0);
-		const y = at(a.position, i + 1) + at(shift, 1);
-		const z = at(a.position, i + 2) + at(shift, 2);
-		if (!within(x, box[0]) || !within(y, box[1]) || !within(z, box[2])) continue;
-		let nearest = 0;
-		let least = Number.POSITIVE_INFINITY;
-		for (let j = 0; j < b.position.length; j += 3) {
-			const dx = at(b.position, j) - x;
-			const dy = at(b.position, j + 1) - y;
-			const dz = at(b.position, j + 2) - z;
+	const near = candidates(p, q, shift, far);
+	for (let i = 0; i < p.length; i += 3) {
+		const x = (p[i] as number) + shift[0];
+		const y = (p[i + 1] as number) + shift[1];
+		const z = (p[i + 2] as number) + shift[2];
+		let nearest = -1;
+		let least = far * far;
+		for (const j of near) {
+			const dx = (q[j] as number) - x;
+			const dy = (q[j + 1] as number) - y;
+			const dz = (q[j + 2] as number) - z;
 			const square = dx * dx + dy * dy + dz * dz;
 			if (square < least) {
 				least = square;
 				nearest = j;
 			}
 		}
-		if (least > far * far) continue;
+		if (nearest < 0) continue;
 		const planes = faces[nearest / 3] as number[];
+		const [dx, dy, dz] = [x - (q[nearest] as number), y - (q[nearest + 1] as number), z - (q[nearest + 2] as number)];
 		let outside = Number.NEGATIVE_INFINITY;
 		for (let f = 0; f < planes.length; f += 3)
-			outside = Math.max(
-				outside,
-				(x - at(b.position, nearest)) * at(planes, f) +
-					(y - at(b.position, nearest + 1)) * at(planes, f + 1) +
-					(z - at(b.position, nearest + 2)) * at(planes, f + 2),
-			);
+			outside = Math.max(outside, dx * (planes[f] as number) + dy * (planes[f + 1] as number) + dz * (planes[f + 2] as number));
 		const t = Math.min(1, Math.max(0, 0.5 - outside / (2 * depth)));
 		const weight = t * t * (3 - 2 * t);
-		for (let k = 0; k < 3; k++) out[i + k] = at(out, i + k) + weight * (at(b.normal, nearest + k) - at(a.normal, i + k));
+		for (let k = 0; k < 3; k++)
+			out[i + k] = (out[i + k] as number) + weight * ((b.normal[nearest + k] as number) - (a.normal[i + k] as number));
 	}
 }
 
@@ -110,8 +117,8 @@ export function blendedNormals(surfaces: readonly Surface[], stature: number): F
 			const neighbours = MEETING.some(([a, b]) => (p.name === a && q.name === b) || (p.name === b && q.name === a));
 			if (!neighbours || (p.side !== null && q.side !== null && p.side !== q.side)) return;
 			const [from, to] = [erectOrigin(i, stature), erectOrigin(j, stature)];
-			const shift = from.map((v, k) => v - (to[k] as number));
-			meet(surfaces[i] as Surface, surfaces[j] as Surface, faces[j] as number[][], shift, stature, out[i] as Float32Array);
+			const shift = [from[0] - to[0], from[1] - to[1], from[2] - to[2]] as const;
+			meet(surfaces[i] as Surface, surfaces[j] as Surface, faces[j] as number[][], shift, DEPTH * stature, out[i] as Float32Array);
 		});
 	});
 	out.forEach((normal, i) => {
