@@ -11,22 +11,27 @@ export type Accepted = Set<string>;
  */
 export function* explain(schema: z.core.$ZodType, value: unknown, accepted: Accepted, path = ""): Generator<Problem> {
 	if (schema instanceof z.ZodMiniExactOptional) yield* explain(schema.def.innerType, value, accepted, path);
-	else if (!isHolder(value)) yield* explainLeaf(schema, value, path);
-	else if (accepts(schema, value)) accepted.add(path);
-	else if (schema instanceof z.ZodMiniObject && isObject(value)) yield* explainObject([schema], value, accepted, path);
-	else if (schema instanceof z.ZodMiniDiscriminatedUnion && isObject(value)) yield* explainKinds(schema, value, accepted, path);
 	else if (schema instanceof z.ZodMiniArray && Array.isArray(value)) {
 		for (const [i, item] of value.entries()) yield* explain(schema.def.element, item, accepted, below(path, i));
 		if (value.length === 0) yield* explainLeaf(schema, value, path);
-	} else if (schema instanceof z.ZodMiniUnion && Array.isArray(value)) {
-		const list = schema.def.options.find((o) => o instanceof z.ZodMiniArray);
+	} else if (!isHolder(value)) yield* explainLeaf(schema, value, path);
+	else if (accepts(schema, value)) accepted.add(path);
+	else yield* explainRefused(schema, value, accepted, path);
+}
+
+/** The same for an object or list that is known to be refused. */
+export function* explainRefused(schema: z.core.$ZodType, value: object, accepted: Accepted, path = ""): Generator<Problem> {
+	if (schema instanceof z.ZodMiniObject && isObject(value)) yield* explainObject([schema], value, accepted, path);
+	else if (schema instanceof z.ZodMiniDiscriminatedUnion && isObject(value)) yield* explainKinds(schema, value, accepted, path);
+	else {
+		const list = schema instanceof z.ZodMiniUnion && Array.isArray(value) && schema.def.options.find((o) => o instanceof z.ZodMiniArray);
 		yield* list ? explain(list, value, accepted, path) : explainLeaf(schema, value, path);
-	} else yield* explainLeaf(schema, value, path);
+	}
 }
 
 /** Without narrowing the type: what is refused is still looked into. */
 const accepts = (schema: z.core.$ZodType, value: unknown): boolean => z.validate(schema, value);
-const isHolder = (value: unknown): value is object => typeof value === "object" && value !== null;
+export const isHolder = (value: unknown): value is object => typeof value === "object" && value !== null;
 const isObject = (value: object): value is Record<string, unknown> => !Array.isArray(value);
 
 const refused = (value: unknown, expected: string, path: string): Problem => ({
@@ -61,7 +66,7 @@ function* explainKinds(
 	const said = Object.hasOwn(value, key) ? value[key] : undefined;
 	const taking = schema.def.options.filter((o) => objectsOf(o).some((kind) => z.validate(kind.shape[key] as z.core.$ZodType, said)));
 	const [only] = taking;
-	if (taking.length === 1 && only) yield* explain(only, value, accepted, path);
+	if (taking.length === 1 && only) yield* explainRefused(only, value, accepted, path);
 	else yield* explainObject(objectsOf(schema), value, accepted, path);
 }
 

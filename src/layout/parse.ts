@@ -1,6 +1,6 @@
 import * as z from "zod/mini";
 import { checkLayout } from "./check/layout.ts";
-import { type Accepted, explain } from "./explain.ts";
+import { type Accepted, explain, explainRefused, isHolder } from "./explain.ts";
 import { migrate } from "./migrate.ts";
 import { acceptedParts, partsOf } from "./parts.ts";
 import { type Problem, WHOLE_FILE } from "./problem.ts";
@@ -52,13 +52,17 @@ function judge(value: unknown, found: Iterable<Problem>): ParseResult {
 		: atMost(
 				MOST_PROBLEMS,
 				found,
-				explain(layoutSchema, migrated.value, accepted),
+				told(migrated.value, accepted),
 				lazily(() => checkLayout(acceptedParts(migrated.value, accepted))),
 			);
 	if (problems.length > 0) return { ok: false, problems };
 	if (!parsed.success) throw new Error(`a layout was refused without a reason: ${parsed.error.message}`);
 	return { ok: true, layout: parsed.data };
 }
+
+/** The faults of a file that the schema has refused. */
+const told = (value: unknown, accepted: Accepted): Iterable<Problem> =>
+	isHolder(value) ? explainRefused(layoutSchema, value, accepted) : explain(layoutSchema, value, accepted);
 
 function* lazily<T>(make: () => Iterable<T>): Generator<T> {
 	yield* make();
