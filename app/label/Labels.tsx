@@ -1,4 +1,4 @@
-import { useLayoutEffect, useMemo, useRef } from "react";
+import { useEffect, useLayoutEffect, useMemo, useRef, useState } from "react";
 import type { DropPicture } from "../../src/shape/drop-picture.ts";
 import type { AssessedCase, Finding } from "../store/core.ts";
 import { useDocument } from "../store/document.ts";
@@ -18,6 +18,8 @@ export function Labels({ shown, picture, onPlacer }: { readonly shown: AssessedC
 		[shown, picture, print, findings, external],
 	);
 	const host = useRef<HTMLDivElement>(null);
+	const fonts = useFontLoads();
+	// biome-ignore lint/correctness/useExhaustiveDependencies: a font that arrives changes every size
 	useLayoutEffect(() => {
 		const children = [...(host.current?.children ?? [])] as HTMLElement[];
 		const labels: Label[] = texts.map((text, i) => {
@@ -33,9 +35,15 @@ export function Labels({ shown, picture, onPlacer }: { readonly shown: AssessedC
 				taken: -1,
 			};
 		});
-		onPlacer(new LabelPlacer(labels));
+		const stage = host.current?.parentElement;
+		const control = stage?.querySelector<HTMLElement>(".field-of-view");
+		const corner =
+			stage && control
+				? { width: stage.clientWidth - control.offsetLeft, height: stage.clientHeight - control.offsetTop }
+				: { width: 0, height: 0 };
+		onPlacer(new LabelPlacer(labels, corner));
 		return () => onPlacer(null);
-	}, [texts, onPlacer]);
+	}, [texts, fonts, onPlacer]);
 	return (
 		<div ref={host} className="labels">
 			{texts.map((text) =>
@@ -57,6 +65,17 @@ export function Labels({ shown, picture, onPlacer }: { readonly shown: AssessedC
 			)}
 		</div>
 	);
+}
+
+/** Counts the fonts that arrived since. */
+function useFontLoads(): number {
+	const [loads, setLoads] = useState(0);
+	useEffect(() => {
+		const count = (): void => setLoads((n) => n + 1);
+		document.fonts.addEventListener("loadingdone", count);
+		return () => document.fonts.removeEventListener("loadingdone", count);
+	}, []);
+	return loads;
 }
 
 /** What the weightiest finding outside its limit says of the landing, or null. */

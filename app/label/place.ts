@@ -27,6 +27,8 @@ interface Box {
 const MARGIN = 12;
 const EDGE = 6;
 const ARROWS: readonly AnchorName[] = ["C", "K", "E"];
+/** Of a label beside the end of a stroke, px. */
+const BESIDE = 6;
 /** Places along an arrow that are kept clear. */
 const SHAFT = 6;
 
@@ -38,11 +40,16 @@ export class LabelPlacer {
 	private used = 0;
 	private firstLabel = 0;
 
-	constructor(private readonly labels: readonly Label[]) {}
+	/** `corner` is what a control takes up in the lower right corner of the picture, px. */
+	constructor(
+		private readonly labels: readonly Label[],
+		private readonly corner: { readonly width: number; readonly height: number },
+	) {}
 
 	place(picture: DropPicture, width: number, height: number): void {
 		this.used = 0;
 		for (const rect of picture.instruments) this.take(rect[0] as number, rect[1] as number, rect[2] as number, rect[3] as number);
+		this.take(width - this.corner.width, height - this.corner.height, width, height);
 		for (const name of ["landing", "ghost", "object"] as const) {
 			const anchor = picture.anchors[name];
 			if (anchor.visible && this.at(picture, anchor.point, width, height)) this.takeAround(this.pixel[0] as number, this.pixel[1] as number, 13);
@@ -89,7 +96,8 @@ export class LabelPlacer {
 			if (i >= 0 && this.fits(label, i, x, y, width, height)) chosen = i;
 		}
 		if (chosen < 0) {
-			if (element.style.visibility !== "hidden") element.style.visibility = "hidden";
+			if (label.rank > 0 || !this.showNear(label, x, y, width, height))
+				if (element.style.visibility !== "hidden") element.style.visibility = "hidden";
 			return;
 		}
 		label.taken = chosen;
@@ -97,6 +105,7 @@ export class LabelPlacer {
 		this.show(label, x + tx * (label.width / 2 + MARGIN), y + ty * (label.height / 2 + MARGIN));
 	}
 
+	/** Beyond the end of what it names; where another label is in the way, beside that end or farther out. */
 	private hang(label: Label, picture: DropPicture, x: number, y: number, width: number, height: number): void {
 		if (label.hang === "centred") {
 			this.show(label, x, y);
@@ -109,21 +118,22 @@ export class LabelPlacer {
 		const l = Math.hypot(x - ox, y - oy);
 		const ux = l > 1 ? (x - ox) / l : 0;
 		const uy = l > 1 ? (y - oy) / l : 1;
-		let reach = tip ? Math.max(l, 14) + 4 : l;
-		for (let tries = 0; tries < 8; tries++) {
-			const cx = ox + ux * (reach + label.width / 2 + 2);
-			const cy = oy + uy * (reach + label.height / 2 + 1);
-			if (!tip || this.clear(label, cx, cy)) {
+		const beside = label.width / 2 + BESIDE;
+		for (let tries = 0; tries < 10; tries++) {
+			const reach = (tip ? Math.max(l, 14) + 4 : l) + 8 * Math.max(0, tries - 2);
+			const cx = tries === 1 ? x + beside : tries === 2 ? x - beside : ox + ux * (reach + label.width / 2 + 2);
+			const cy = tries === 1 || tries === 2 ? y : oy + uy * (reach + label.height / 2 + 1);
+			if (this.clear(label, cx, cy, width, height)) {
 				this.show(label, cx, cy);
 				return;
 			}
-			reach += 8;
 		}
 		label.element.style.visibility = "hidden";
 	}
 
-	/** Whether a place is free of the labels that hang from other arrows. */
-	private clear(label: Label, cx: number, cy: number): boolean {
+	/** Whether a place lies within the picture and is free of other labels. */
+	private clear(label: Label, cx: number, cy: number, width: number, height: number): boolean {
+		if (cx < label.width / 2 || cy < label.height / 2 || cx > width - label.width / 2 || cy > height - label.height / 2) return false;
 		for (let k = this.firstLabel; k < this.used; k++) {
 			const b = this.boxes[k] as Box;
 			if (cx - label.width / 2 < b.x1 && cx + label.width / 2 > b.x0 && cy - label.height / 2 < b.y1 && cy + label.height / 2 > b.y0) return false;
@@ -138,10 +148,27 @@ export class LabelPlacer {
 		if (element.style.visibility !== "visible") element.style.visibility = "visible";
 	}
 
+	/** Shows the first label, which carries the answer, as near to its anchor as there is room in the picture; returns whether there is any. */
+	private showNear(label: Label, x: number, y: number, width: number, height: number): boolean {
+		const farX = width / 2 - label.width / 2 - EDGE - 4;
+		const farY = height / 2 - label.height / 2 - EDGE - 4;
+		for (let r = 24; r < width + height; r += 24)
+			for (let i = 0; i < 16; i++) {
+				const cx = width / 2 + Math.max(-farX, Math.min(farX, x + r * Math.cos((i * Math.PI) / 8) - width / 2));
+				const cy = height / 2 + Math.max(-farY, Math.min(farY, y + r * Math.sin((i * Math.PI) / 8) - height / 2));
+				if (!this.free(label, cx, cy, width, height)) continue;
+				this.show(label, cx, cy);
+				return true;
+			}
+		return false;
+	}
+
 	private fits(label: Label, i: number, x: number, y: number, width: number, height: number): boolean {
 		const [tx, ty] = label.tries[i] as readonly [number, number];
-		const cx = x + tx * (label.width / 2 + MARGIN);
-		const cy = y + ty * (label.height / 2 + MARGIN);
+		return this.free(label, x + tx * (label.width / 2 + MARGIN), y + ty * (label.height / 2 + MARGIN), width, height);
+	}
+
+	private free(label: Label, cx: number, cy: number, width: number, height: number): boolean {
 		const x0 = cx - label.width / 2 - 3;
 		const x1 = cx + label.width / 2 + 3;
 		const y0 = cy - label.height / 2 - 3;
