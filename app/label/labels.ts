@@ -1,3 +1,4 @@
+import { type Drop, GAP } from "../../src/activity/drop.ts";
 import type { AnchorName, DropPicture } from "../../src/shape/drop-picture.ts";
 
 export interface LabelText {
@@ -44,7 +45,7 @@ const BESIDE_GAP = [
 type Print = (value: number, unit: string, figures?: number) => string;
 
 /** "0.30 m against spin", with the axial share where it counts. */
-export function gapWords(gap: NonNullable<DropPicture["stage"]["gap"]>, print: Print): string {
+export function gapWords(gap: NonNullable<Drop["gap"]>, print: Print): string {
 	const parts: string[] = [];
 	if (Math.abs(gap.prograde) >= 0.1 * gap.length) parts.push(`${print(Math.abs(gap.prograde), "m", 2)} ${gap.prograde < 0 ? "against spin" : "with spin"}`);
 	if (Math.abs(gap.axial) >= 0.1 * gap.length) parts.push(`${print(Math.abs(gap.axial), "m", 2)} along the axis`);
@@ -53,11 +54,12 @@ export function gapWords(gap: NonNullable<DropPicture["stage"]["gap"]>, print: P
 
 /** Every label of a drop's picture, the most important first. */
 export function dropLabels(picture: DropPicture, print: Print, verdict: string | null, external: boolean): readonly LabelText[] {
-	const { gap } = picture.stage;
+	const { drop } = picture.stage;
+	const { gap } = drop;
 	const ten = picture.minorFactor === 10 ? " ×10" : "";
 	const force = (letter: "C" | "K" | "E", text: string): LabelText => ({ anchor: letter, letter, text, look: "chip", tries: ROUND, ...(external ? {} : { hang: "tip" as const }) });
 	return [
-		...(gap ? [{ anchor: "gap", text: gapWords(gap, print), look: "answer", opens: "landing_prograde_m", tries: BESIDE_GAP, ...(verdict ? { verdict } : {}) } as const] : []),
+		...(gap ? [{ anchor: "gap", text: gapWords(gap, print), look: "answer", opens: drop.velocity.every((v) => v === 0) ? "landing_prograde_m" : GAP, tries: BESIDE_GAP, ...(verdict ? { verdict } : {}) } as const] : []),
 		force("K", `K${external ? " Coriolis" : ""}${ten}`),
 		force("C", external ? "C centrifugal" : "C"),
 		force("E", `E${external ? " Euler" : ""}${ten}`),

@@ -1,5 +1,6 @@
+import { GAP } from "../../src/activity/drop.ts";
 import { apparentParts } from "../../src/frame/apparent.ts";
-import { angleNear, deckTriad, floorAlong } from "../../src/layout/habitat.ts";
+import { deckTriad } from "../../src/layout/habitat.ts";
 import { degFromRad, gFromMps2, rpmFromRadps } from "../../src/quantity/convert.ts";
 import { dot, length, ring } from "../../src/vector/vec3.ts";
 import type { AssessedCase, Finding, LayoutFile } from "../store/core.ts";
@@ -55,8 +56,8 @@ export interface Headline {
 	readonly lead: string;
 	readonly value: number;
 	readonly unit: string;
-	/** Summary key the number comes from; null where it is the picture's own comparison. */
-	readonly key: string | null;
+	/** Key of its derivation: a summary key, or that of the comparison without turning. */
+	readonly key: string;
 	/** After the number. */
 	readonly tail: string;
 	/** More, as a sentence; empty where there is none. */
@@ -88,14 +89,14 @@ export function headline(c: AssessedCase, print: Printer): Headline | null {
 	const seen = fromFeetWords(c, print);
 	if (prograde === null)
 		return { lead: `${lead} after`, value: end, unit: "s", key: "flight_time_s", tail: "of flight", also: sentence(seen) };
-	const gap = tossed(c) ? gapOf(c) : null;
+	const gap = tossed(c) ? (c.motion.gap?.prograde ?? null) : null;
 	const ofHand = `${withOrAgainst(prograde)} of your hand`;
 	if (gap === null) return { lead, value: Math.abs(prograde), unit: "m", key: "landing_prograde_m", tail: ofHand, also: sentence(seen) };
 	return {
 		lead,
 		value: Math.abs(gap),
 		unit: "m",
-		key: null,
+		key: GAP,
 		tail: `${withOrAgainst(gap)} of where it would land without turning`,
 		also: sentence(seen === "" ? `${print(Math.abs(prograde), "m", 2)} ${ofHand}` : seen),
 	};
@@ -124,15 +125,6 @@ export function fromFeetWords(c: AssessedCase, print: Printer): string {
 }
 
 const tossed = (c: AssessedCase): boolean => c.motion?.velocity.some((v) => v !== 0) ?? false;
-
-/** How far turning moved the landing along the floor, m, + with spin; null where one of the two does not reach that floor. */
-export function gapOf(c: AssessedCase): number | null {
-	if (!c.motion) return null;
-	const { deck, landing, ghost, flight } = c.motion;
-	if (!landing || !ghost.point || flight.struck.kind !== "deck" || flight.struck.deck !== deck.index) return null;
-	const without = angleNear(Math.atan2(ghost.point[1], ghost.point[0]), deck.middle);
-	return floorAlong(deck, angleNear(Math.atan2(landing.point[1], landing.point[0]), without)) - floorAlong(deck, without);
-}
 
 /** What the impact is like. */
 export function consequence(c: AssessedCase, print: Printer): string {

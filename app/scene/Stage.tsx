@@ -87,6 +87,7 @@ export function Stage() {
 			{shown && picture && <Labels shown={shown} picture={picture} onPlacer={take} />}
 			{picture && <FieldOfView view={view} />}
 			{canvas.lost && <p className="lost">The picture was lost by the graphics system. It comes back by itself.</p>}
+			{canvas.failed && <p className="lost">The picture cannot be drawn here: {canvas.failed}. The same facts stand in words beside it.</p>}
 			{!picture && <p className="lost">Nothing to show: choose an activity that is built.</p>}
 		</div>
 	);

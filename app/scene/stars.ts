@@ -7,23 +7,19 @@ attribute vec3 light;
 uniform mat3 sky;
 uniform float ratio;
 varying vec3 vLight;
-varying float vSize;
 void main() {
 	vec4 clip = projectionMatrix * vec4(mat3(viewMatrix) * (sky * position), 1.0);
 	gl_Position = clip.w > 0.0 ? vec4(clip.xy, 0.0, clip.w) : vec4(2.0, 2.0, 2.0, 1.0);
-	float wanted = diameter * ratio;
-	vSize = clamp(wanted, 1.0, 16.0);
-	gl_PointSize = vSize;
-	vLight = light * min(1.0, wanted * wanted);
+	gl_PointSize = min(diameter * ratio + 1.2, 16.0);
+	vLight = light;
 }`;
 
 const FRAGMENT = /* glsl */ `
 varying vec3 vLight;
-varying float vSize;
 void main() {
-	float r = length(gl_PointCoord - 0.5) * 2.0;
-	float disc = 1.0 - smoothstep(max(0.0, 1.0 - 3.0 / vSize), 1.0, r);
-	gl_FragColor = vec4(vLight * disc, 1.0);
+	vec2 d = (gl_PointCoord - 0.5) * 2.0;
+	float disc = max(0.0, 1.0 - dot(d, d));
+	gl_FragColor = vec4(vLight * disc * disc, 1.0);
 	#include <colorspace_fragment>
 }`;
 

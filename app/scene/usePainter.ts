@@ -1,6 +1,7 @@
 import { createElement, type ReactElement, useEffect, useRef, useState } from "react";
 import type { Conductor } from "./conductor.ts";
 import type { Painter } from "./painter.ts";
+import { createRasterPainter } from "./raster-painter.ts";
 
 type Kind = "webgl" | "raster";
 
@@ -15,10 +16,11 @@ function asked(): Kind | null {
  * none or WebGL fails, since there the raster is the faster of the two. A canvas keeps its first kind of
  * context, so another painter gets another canvas.
  */
-export function usePainter(conductor: Conductor): { readonly element: ReactElement; readonly kind: Kind | "starting"; readonly lost: boolean } {
+export function usePainter(conductor: Conductor): { readonly element: ReactElement; readonly kind: Kind | "starting"; readonly lost: boolean; readonly failed: string | null } {
 	const canvas = useRef<HTMLCanvasElement>(null);
 	const [kind, setKind] = useState<Kind | "starting">("starting");
 	const [lost, setLost] = useState(false);
+	const [failed, setFailed] = useState<string | null>(null);
 
 	useEffect(() => {
 		if (kind !== "starting") return;
@@ -44,7 +46,7 @@ export function usePainter(conductor: Conductor): { readonly element: ReactEleme
 				const made =
 					kind === "webgl"
 						? await (await import("./gl-painter.tsx")).createGlPainter(element)
-						: (await import("./raster-painter.ts")).createRasterPainter(element);
+						: createRasterPainter(element);
 				if (!live) {
 					made.dispose();
 					return;
@@ -52,8 +54,9 @@ export function usePainter(conductor: Conductor): { readonly element: ReactEleme
 				painter = made;
 				conductor.use(made);
 			} catch (error) {
-				if (kind === "raster") throw error;
-				if (live) setKind("raster");
+				if (!live) return;
+				if (kind === "webgl") setKind("raster");
+				else setFailed(error instanceof Error ? error.message : String(error));
 			}
 		};
 		void start();
@@ -77,5 +80,5 @@ export function usePainter(conductor: Conductor): { readonly element: ReactEleme
 	}, [kind, conductor]);
 
 	const element = createElement("canvas", { key: kind, ref: canvas, className: "canvas", "aria-hidden": true });
-	return { element, kind, lost };
+	return { element, kind, lost, failed };
 }

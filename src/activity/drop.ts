@@ -3,7 +3,7 @@ import { type Flight, fly } from "../flight/fly.ts";
 import { type Ghost, ghostOf } from "../flight/ghost.ts";
 import { fromFeet, type Landing, landing } from "../flight/landing.ts";
 import { type Cylindrical, cylindricalFromRing, directionOf, localFromRing, ringFromLocal } from "../frame/place.ts";
-import { angleNear, type Deck, deckTriad, placeOnDeck } from "../layout/habitat.ts";
+import { angleNear, type Deck, deckTriad, floorAlong, placeOnDeck } from "../layout/habitat.ts";
 import type { ActivityOf } from "../layout/schema.ts";
 import { STANDARD_GRAVITY } from "../quantity/constants.ts";
 import { degFromRad, radFromDeg, rpmFromRadps } from "../quantity/convert.ts";
@@ -29,6 +29,8 @@ export interface Drop {
 	readonly ghost: Ghost;
 	/** ½ ρ C_d A / m, 1/m; 0 where the air is left out. */
 	readonly drag: number;
+	/** From where it would land without turning to where it lands, along the floor, m, + prograde and + axial; null where one of the two is not on the release deck's floor. */
+	readonly gap: { readonly prograde: number; readonly axial: number; readonly length: number } | null;
 	/** Where the person stands: as the layout says, else so that the hand is at the release. */
 	readonly stance: Stance;
 	readonly fromFeet: { readonly prograde: number | null; readonly axial: number | null } | null;
@@ -49,6 +51,7 @@ export function computeDrop(context: Context, file: DropFile): Drop {
 	const stance = file.feet
 		? givenStance(deck, angleNear(radFromDeg(file.feet.angle_deg), deck.middle), file.feet.axial_m, radFromDeg(file.feet.facing_deg))
 		: stanceAtHand(deck, position, context.person.stature, radFromDeg(file.release?.heading_deg ?? 0));
+	const ghost = ghostOf(deck, spin.rate(0), position, velocity, diameter, drag);
 	return {
 		kind: "drop",
 		deck,
@@ -57,11 +60,19 @@ export function computeDrop(context: Context, file: DropFile): Drop {
 		object: { mass, diameter },
 		flight,
 		landing: found,
-		ghost: ghostOf(deck, spin.rate(0), position, velocity, diameter, drag),
+		ghost,
+		gap: flight.struck.kind === "deck" && flight.struck.deck === deck.index && found && ghost.point ? gapBetween(deck, ghost.point, found.point) : null,
 		drag,
 		stance,
 		fromFeet: found && stance.given ? fromFeet(habitat, flight, found, deck, position, stance.position) : null,
 	};
+}
+
+function gapBetween(deck: Deck, from: RingVec, to: RingVec): NonNullable<Drop["gap"]> {
+	const start = angleNear(Math.atan2(from[1], from[0]), deck.middle);
+	const prograde = floorAlong(deck, angleNear(Math.atan2(to[1], to[0]), start)) - floorAlong(deck, start);
+	const axial = to[2] - from[2];
+	return { prograde, axial, length: Math.hypot(prograde, axial) };
 }
 
 /** ½ ρ C_d A / m, 1/m. */
@@ -109,6 +120,9 @@ export function eventsOfDrop({ flight }: Drop): readonly MotionEvent[] {
 		{ t: flight.end, name: flight.struck.kind === "element" ? `strikes ${flight.struck.id}` : STRIKES[flight.struck.kind] },
 	];
 }
+
+/** The derivation of the picture's own comparison stands beside those of the summary under this key. */
+export const GAP = "gap";
 
 const NOTHING_STRUCK = "nothing was struck";
 const LEFT = "it left through a hatch into no deck's volume";
@@ -158,6 +172,19 @@ export function summariseDrop(context: Context, file: DropFile, drop: Drop): Cas
 		derive("equal-earth-drop", [speed, put("g₀", "standard gravity", STANDARD_GRAVITY, "m/s²")]),
 	);
 	writer.list("passed", flight.passed, struck);
+	if (drop.gap && found?.prograde != null)
+		writer.beside(
+			GAP,
+			derive(
+				"without-turning",
+				[
+					put("s", "offset of the landing from the point below the release", found.prograde, "m"),
+					put("s₀", "offset of the landing without turning", found.prograde - drop.gap.prograde, "m"),
+					put("g", "uniform level, that of the floor", drop.ghost.field, "m/s²"),
+				],
+				[file.drag ? "The same air drag." : "No air drag in either."],
+			),
+		);
 	return writer.done();
 
 	function feetNumbers(to: SummaryWriter, d: Drop, reason: string): void {

@@ -100,6 +100,17 @@ export const FORMULAS = {
 		source: "Geometry",
 		dropped: "Nothing.",
 	},
+	"without-turning": {
+		title: "From where it would land without turning",
+		expression: "gap = s − s₀;   s₀: the same release in a room that does not turn, under the uniform level g = Ω² R",
+		terms: [
+			{ symbol: "s", meaning: "offset of the landing from the point below the release", unit: "m" },
+			{ symbol: "s₀", meaning: "offset of the landing without turning", unit: "m" },
+			{ symbol: "g", meaning: "uniform level, that of the floor", unit: "m/s²" },
+		],
+		source: "Uniform field, OpenStax University Physics vol. 1, §4.3; the same air and the same floor",
+		dropped: "Every surface but the release deck's own floor.",
+	},
 	"from-feet": {
 		title: "Offset from the feet",
 		expression: "s_feet = s + s_release − s_feet₀",

@@ -25,6 +25,10 @@ export class SummaryWriter {
 		this.summary[key] = value;
 		this.derivations[key] = derivation;
 	}
+	/** The derivation of a number that is shown but not part of the summary. */
+	beside(key: string, derivation: Derivation): void {
+		this.derivations[key] = derivation;
+	}
 	none(key: string, reason: string): void {
 		this.summary[key] = null;
 		this.reasons[key] = reason;

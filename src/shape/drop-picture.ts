@@ -289,7 +289,7 @@ export class DropPicture {
 		if (stage.landing) anchors.landing.point.set(stage.landing);
 		anchors.ghost.visible = stage.ghostHasLanded && stage.ghostLanding !== null;
 		if (stage.ghostLanding) anchors.ghost.point.set(stage.ghostLanding);
-		anchors.gap.visible = anchors.landing.visible && anchors.ghost.visible && stage.gap !== null;
+		anchors.gap.visible = anchors.landing.visible && anchors.ghost.visible && stage.drop.gap !== null;
 		if (stage.landing && stage.ghostLanding)
 			for (let k = 0; k < 3; k++) anchors.gap.point[k] = ((stage.landing[k] as number) + (stage.ghostLanding[k] as number)) / 2;
 	}

@@ -38,8 +38,6 @@ export class DropStage {
 	/** Where it lands and where it would have without turning, stage, m; null where it does not. */
 	readonly landing: Float64Array | null;
 	readonly ghostLanding: Float64Array | null;
-	/** From where it would have landed to where it lands, along the floor, m, + prograde and + axial; null where one is missing or lies on another deck. */
-	readonly gap: { readonly prograde: number; readonly axial: number; readonly length: number } | null;
 	/** Box about the person, the flight and where it would land without turning, stage, m. */
 	readonly bounds: { readonly low: Float64Array; readonly high: Float64Array };
 	/** Unit direction of apparent gravity on the standing person; none at no weight. */
@@ -79,7 +77,6 @@ export class DropStage {
 		this.landed = marks.landed;
 		this.ghostLanded = marks.ghostLanded;
 		this.gapParts = marks.gap;
-		this.gap = marks.between;
 		this.landing = drop.landing ? this.stagePoint(drop.landing.point) : null;
 		this.ghostLanding = drop.ghost.point ? this.stagePoint(drop.ghost.point) : null;
 		this.parts = [...this.ghostLanded, ...this.gapParts, ...this.landed, ...(ghost ? ghost.parts : []), ...trail.parts, ...this.objectParts];
@@ -101,7 +98,7 @@ export class DropStage {
 		return out;
 	}
 
-	private marks(): { landed: readonly Part[]; ghostLanded: readonly Part[]; gap: readonly Part[]; between: DropStage["gap"] } {
+	private marks(): { landed: readonly Part[]; ghostLanded: readonly Part[]; gap: readonly Part[]; } {
 		const { drop, frame, habitat } = this;
 		const { struck } = drop.flight;
 		const radius = Math.min(0.09, Math.max(0.03, drop.object.diameter / 2));
@@ -113,7 +110,6 @@ export class DropStage {
 			landed: floor && landing ? landingMark(frame, floor, landing, radius) : [],
 			ghostLanded: ghost ? ghostMark(frame, drop.deck, ghost, radius) : [],
 			gap: same && floor && landing && ghost ? gapLine(frame, floor, ghost, landing, radius) : [],
-			between: same && landing && ghost ? gapBetween(landing.along - ghost.along, landing.axial - ghost.axial) : null,
 		};
 	}
 
@@ -188,8 +184,6 @@ export class DropStage {
 		return [Math.cos(this.drop.stance.facing), 0, Math.sin(this.drop.stance.facing)];
 	}
 }
-
-const gapBetween = (prograde: number, axial: number) => ({ prograde, axial, length: Math.hypot(prograde, axial) });
 
 function setVisible(parts: readonly Part[], visible: boolean): void {
 	for (const p of parts) p.visible = visible;

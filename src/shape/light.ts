@@ -16,7 +16,7 @@ const l = Math.hypot(...LIGHT.lampDirection);
 /** Factor on the linear albedo for a unit normal. */
 export function lambert(nx: number, ny: number, nz: number): number {
 	const hemisphere = LIGHT.ground + (LIGHT.sky - LIGHT.ground) * (0.5 + 0.5 * ny);
-	const [x, y, z] = LIGHT.lampDirection;
-	const facing = (nx * x + ny * y + nz * z) / l;
+	const lamp = LIGHT.lampDirection;
+	const facing = (nx * lamp[0] + ny * lamp[1] + nz * lamp[2]) / l;
 	return (hemisphere + LIGHT.lamp * Math.max(0, facing)) / Math.PI;
 }
