@@ -1,7 +1,7 @@
 import { below, type Problem, shorten, WHOLE_FILE } from "./problem.ts";
 
-/** UTF-8 bytes of a layout file at most. */
-export const MOST_BYTES = 4 * 1024 * 1024;
+/** UTF-8 bytes of a layout file at most: 4 MB. */
+export const MOST_BYTES = 4_000_000;
 /** Objects and lists within one another at most. */
 export const MOST_DEPTH = 32;
 
