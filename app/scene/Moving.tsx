@@ -3,20 +3,20 @@ import { useEffect, useMemo } from "react";
 import type { Part } from "../../src/shape/drawable.ts";
 import { dispose, setCount, wrap } from "./wrap.ts";
 
-/** What moves: each frame every part's matrix, count and visibility are copied onto its object. */
-export function Moving({ parts, onReady }: { readonly parts: readonly Part[]; readonly onReady: () => void }) {
+/** What moves, drawn in the order `from`, `from` + 1, …: each frame every part's matrix, count and visibility are copied onto its object. */
+export function Moving({ parts, from, onReady }: { readonly parts: readonly Part[]; readonly from: number; readonly onReady?: () => void }) {
 	const objects = useMemo(
 		() =>
 			parts.map((part, i) => {
-				const object = wrap(part.drawable, 2000 + i);
+				const object = wrap(part.drawable, from + i);
 				object.matrixAutoUpdate = false;
 				object.frustumCulled = false;
 				return object;
 			}),
-		[parts],
+		[parts, from],
 	);
 	useEffect(() => {
-		onReady();
+		onReady?.();
 		return () => {
 			for (const object of objects) dispose(object);
 		};

@@ -3,6 +3,8 @@ import { DropFigure } from "../../src/shape/drop-figure.ts";
 import { DropPicture } from "../../src/shape/drop-picture.ts";
 import { DropStage } from "../../src/shape/drop-stage.ts";
 import type { Stars } from "../../src/shape/drawable.ts";
+import { createFigure, type Figure } from "../../src/shape/figure.ts";
+import { StillShapes } from "../../src/shape/still.ts";
 import { FieldOfView } from "../control/FieldOfView.tsx";
 import { listenKeys } from "../control/keys.ts";
 import { currentLook, lookFor, onLook } from "../control/look.ts";
@@ -19,10 +21,10 @@ import { offerProbe } from "./probe-stage.ts";
 import { usePainter } from "./usePainter.ts";
 
 /** The picture of a case; null where its kind is not built. */
-function pictureOf(c: AssessedCase, stars: Stars): DropPicture | null {
-	if (!c.motion) return null;
+function pictureOf(c: AssessedCase | null, stars: Stars, shapes: StillShapes, figure: Figure): DropPicture | null {
+	if (!c?.motion) return null;
 	const { context, motion } = c;
-	return new DropPicture(new DropStage(context.habitat, context.spin, motion, stars), new DropFigure(motion, context.person.stature));
+	return new DropPicture(new DropStage(context.habitat, context.spin, motion, stars, shapes), new DropFigure(motion, figure));
 }
 
 /** The stage: canvas, controls and labels of the selected case. */
@@ -30,7 +32,10 @@ export function Stage() {
 	const shown = useSelectedCase();
 	const view = useSession((s) => s.view);
 	const stars = useStars((s) => s.stars);
-	const picture = useMemo(() => (shown ? pictureOf(shown, stars) : null), [shown, stars]);
+	const [shapes] = useState(() => new StillShapes());
+	const stature = shown?.context.person.stature ?? 1.75;
+	const figure = useMemo(() => createFigure(stature), [stature]);
+	const picture = useMemo(() => pictureOf(shown, stars, shapes, figure), [shown, stars, shapes, figure]);
 	const host = useRef<HTMLDivElement>(null);
 	const placer = useRef<LabelPlacer | null>(null);
 	const live = useRef(picture);

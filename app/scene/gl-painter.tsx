@@ -26,6 +26,9 @@ export async function createGlPainter(canvas: HTMLCanvasElement): Promise<Painte
 	let store: { getState(): RootState } | null = null;
 	let ready = false;
 	let shown: DropPicture | null = null;
+	const onReady = (): void => {
+		ready = true;
+	};
 	return {
 		kind: "webgl",
 		show(picture) {
@@ -37,8 +40,9 @@ export async function createGlPainter(canvas: HTMLCanvasElement): Promise<Painte
 					<Lights />
 					<Viewpoint picture={picture} camera={camera} />
 					<Sky picture={picture} />
-					<Still key={`still ${keyOf(picture)}`} picture={picture} />
-					<Moving key={`moving ${keyOf(picture)}`} parts={picture.parts} onReady={() => (ready = true)} />
+					<Still picture={picture} />
+					<Moving parts={picture.figure.parts} from={2000} />
+					<Moving parts={picture.others} from={3000} onReady={onReady} />
 				</>,
 			);
 		},
@@ -52,15 +56,4 @@ export async function createGlPainter(canvas: HTMLCanvasElement): Promise<Painte
 		},
 		dispose: () => root.unmount(),
 	};
-}
-
-const keys = new WeakMap<DropPicture, number>();
-let count = 0;
-/** Another picture is another tree: its objects are made anew and the old ones freed. */
-function keyOf(picture: DropPicture): number {
-	const known = keys.get(picture);
-	if (known !== undefined) return known;
-	count += 1;
-	keys.set(picture, count);
-	return count;
 }

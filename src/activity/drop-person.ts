@@ -1,5 +1,6 @@
 import { createDropper, type Dropper } from "../body/drop.ts";
-import type { Triad } from "../frame/place.ts";
+import { deckFloor } from "../body/floor.ts";
+import { localFromRing, type Triad } from "../frame/place.ts";
 import { deckTriad } from "../layout/habitat.ts";
 import type { Drop } from "./drop.ts";
 
@@ -20,12 +21,17 @@ export function personOf(drop: Drop, stature: number): Dropper {
 		diameter: drop.object.diameter,
 		hand: (release[2] as number) >= -0.02 ? "right" : "left",
 		track,
-		floor: (forward, right) => {
-			if (deck.floor === "flat") return 0;
-			const prograde = forward * Math.cos(stance.facing) - right * Math.sin(stance.facing);
-			return deck.radius - Math.sqrt(deck.radius ** 2 - prograde ** 2);
-		},
+		velocity: stanceVector(drop, deckTriad(deck, stance.angle)),
+		floor: deckFloor(deck, stance.facing),
 	});
+}
+
+/** The release velocity in the stance frame (forward, up, right), m/s. */
+function stanceVector(drop: Drop, triad: Triad): readonly [number, number, number] {
+	const [x, y, z] = localFromRing(triad, drop.velocity);
+	const c = Math.cos(drop.stance.facing);
+	const s = Math.sin(drop.stance.facing);
+	return [c * x + s * z, y, c * z - s * x];
 }
 
 /** Where the person looks for the object: its place in the stance frame (forward, up, right; m), kept ahead of the feet. */

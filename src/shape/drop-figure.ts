@@ -4,27 +4,29 @@ import { type Dropper, dropPose, poseFor } from "../body/drop.ts";
 import { createEyePoint, type EyePoint, eyePoint } from "../body/gaze.ts";
 import type { Pose } from "../body/pose.ts";
 import type { Part } from "./drawable.ts";
-import { createFigure, type Figure, stanceToStage, updateFigure } from "./figure.ts";
+import { type Figure, stanceToStage, updateFigure } from "./figure.ts";
 
-/** Too near the eyes to be seen by oneself as more than a bar: trunk, and the ink edges of the upper arms. */
-const NEAR = /crew-(thorax|abdomen)(-ink)?$|(upperArm|collar|pelvis)-ink$/;
+/** So near the eyes that it would fill the picture when looking down. */
+const TRUNK = /^crew-(thorax|abdomen)(-ink)?$/;
 
 /** The person who lets go, moved by time. */
 export class DropFigure {
 	readonly parts: readonly Part[];
 	/** Stage coordinates. */
 	readonly eye: EyePoint = createEyePoint();
-	private readonly figure: Figure;
 	private readonly unseen: readonly Part[];
 	private readonly dropper: Dropper;
 	private readonly pose: Pose;
 	private readonly own = createEyePoint();
 	private readonly matrix = new Float32Array(16);
 
-	constructor(drop: Drop, stature: number) {
-		this.figure = createFigure(stature);
-		this.parts = this.figure.parts;
-		this.unseen = [...this.figure.hiddenInFirstPerson, ...this.parts.filter((p) => NEAR.test(p.drawable.name))];
+	constructor(
+		drop: Drop,
+		private readonly figure: Figure,
+	) {
+		const { stature } = figure;
+		this.parts = figure.parts;
+		this.unseen = [...figure.hiddenInFirstPerson, ...this.parts.filter((p) => TRUNK.test(p.drawable.name))];
 		stanceToStage(0, 0, 0, drop.stance.facing, this.matrix);
 		this.dropper = personOf(drop, stature);
 		this.pose = poseFor(this.dropper);

@@ -49,7 +49,10 @@ const SHORTEST = 24;
 /** The whole picture of a drop: stage, person, arrows, instruments and cameras, for any renderer. */
 export class DropPicture {
 	readonly camera: Camera = createCamera(1.3);
+	/** All that moves, in the order it is drawn: the person first. */
 	readonly parts: readonly Part[];
+	/** `parts` without the person, who outlives an edit. */
+	readonly others: readonly Part[];
 	readonly anchors: Readonly<Record<AnchorName, Anchor>> = Object.fromEntries(
 		ANCHORS.map((name) => [name, { point: new Float64Array(3), visible: false }]),
 	) as Record<AnchorName, Anchor>;
@@ -79,9 +82,8 @@ export class DropPicture {
 		readonly figure: DropFigure,
 	) {
 		this.seen = new Uint8Array(stage.still.length).fill(1);
-		this.parts = [
+		this.others = [
 			...stage.parts,
-			...figure.parts,
 			...this.rosePanel.parts,
 			...this.plumbPanel.parts,
 			...this.axisPanel.parts,
@@ -91,6 +93,7 @@ export class DropPicture {
 			...this.plumb.parts,
 			...this.axes.parts,
 		];
+		this.parts = [...figure.parts, ...this.others];
 	}
 
 	/** The look of External as first shown: beside the person, prograde to the right, the whole flight in the picture. */

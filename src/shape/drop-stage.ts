@@ -4,14 +4,12 @@ import type { Spin } from "../frame/spin.ts";
 import type { Deck, Habitat } from "../layout/habitat.ts";
 import { writeRingFromIcrs } from "../sky/attitude.ts";
 import type { RingVec } from "../vector/vec3.ts";
-import { bayShapes } from "./bay.ts";
 import type { Drawable, Part, Stars } from "./drawable.ts";
-import { elementShapes } from "./elements.ts";
 import { objectShape } from "./elements-object.ts";
-import { contactShadow } from "./elements-shadow.ts";
 import { floorPoint, gapLine, ghostMark, landingMark } from "./landing-mark.ts";
 import { part, placeAt } from "./part.ts";
 import { putDirection, putOnStage, type StageFrame, stageFrame, toStage } from "./stage-frame.ts";
+import type { StillShapes } from "./still.ts";
 import { GHOST_TRAIL, OBJECT_TRAIL, trailOf } from "./trail.ts";
 
 /** The object's apparent-gravity parts at an instant, stage components, m/s². */
@@ -59,15 +57,12 @@ export class DropStage {
 		private readonly spin: Spin,
 		readonly drop: Drop,
 		readonly stars: Stars,
+		shapes: StillShapes,
 	) {
 		const { deck, stance } = drop;
 		this.frame = stageFrame(deck, stance.angle, stance.axial);
 		const { frame } = this;
-		this.still = [
-			...bayShapes(habitat, frame),
-			...elementShapes(habitat, frame),
-			contactShadow(frame, deck, stance.angle, stance.axial, 0.26, 0.3),
-		];
+		this.still = shapes.of(habitat, frame);
 		const trail = trailOf(frame, drop.flight.path, drop.flight.end, OBJECT_TRAIL);
 		const ghost = drop.ghost.end === null ? null : trailOf(frame, drop.ghost.path, drop.ghost.end, GHOST_TRAIL);
 		this.showTrail = trail.show;
