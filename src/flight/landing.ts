@@ -1,5 +1,5 @@
 import { type Deck, deckTriad, type Habitat, placeOnDeck } from "../layout/habitat.ts";
-import { dot, type RingVec, ring } from "../vector/vec3.ts";
+import { cross, dot, type RingVec, ring } from "../vector/vec3.ts";
 import { Convex } from "./convex.ts";
 import type { Flight } from "./fly.ts";
 import { pointTouched, tangentOf } from "./touched.ts";
@@ -34,13 +34,16 @@ export function landing(habitat: Habitat, flight: Flight, releaseDeck: Deck, rel
 	const velocity = ring(s[3]!, s[4]!, s[5]!);
 	const point = touched(deck, flight, centre);
 	const speed = Math.sqrt(dot(velocity, velocity));
-	const from = (axis: RingVec): number | null => (speed > 0 ? Math.acos(Math.min(1, Math.max(-1, -dot(velocity, axis) / speed))) : null);
+	const from = (up: RingVec): number | null => {
+		const across = cross(velocity, up);
+		return speed > 0 ? Math.atan2(Math.sqrt(dot(across, across)), -dot(velocity, up)) : null;
+	};
 	const r = radiusOf(centre);
 	const fromRadial = from(ring(-centre[0] / r, -centre[1] / r, 0));
 	return {
 		point,
 		prograde: progradeOffset(deck, flight, point, releaseDeck, release, release),
-		axial: surface.kind === "end-low" || surface.kind === "end-high" ? null : clean(point[2] - release[2]),
+		axial: surface.kind === "end-low" || surface.kind === "end-high" ? null : point[2] - release[2],
 		radius: radiusOf(point),
 		speed,
 		angle: deck.floor === "curved" ? fromRadial : from(deckTriad(deck, 0).up),
@@ -61,7 +64,7 @@ export function fromFeet(
 	if (struck.kind === "outside" || struck.kind === "none") throw new RangeError(`a flight that ended ${struck.kind} has no landing`);
 	return {
 		prograde: progradeOffset(habitat.decks[struck.deck]!, flight, found.point, own, release, feet),
-		axial: found.axial === null ? null : clean(found.point[2] - feet[2]),
+		axial: found.axial === null ? null : found.point[2] - feet[2],
 	};
 }
 
@@ -92,11 +95,11 @@ function progradeOffset(deck: Deck, flight: Flight, point: RingVec, own: Deck, r
 	const depth = kind === "ceiling" ? deck.radius - deck.headroom : deck.radius;
 	const below = straightDown(own, from, deck, depth);
 	if (!below) return null;
-	if (deck.floor === "flat") return clean(tangentOf(deck, point) - tangentOf(deck, below));
+	if (deck.floor === "flat") return tangentOf(deck, point) - tangentOf(deck, below);
 	const centre = ring(flight.state[0]!, flight.state[1]!, 0);
 	const turned = flight.path.sweptAt(flight.end) + angleFrom(centre, point) - angleFrom(release, below);
 	const along = kind === "deck" || kind === "ceiling" || kind === "coaming" ? depth : radiusOf(point);
-	return clean(along * turned);
+	return along * turned;
 }
 
 /** Where the line through `from`, straight down on its own deck, meets the face at `depth` of another (or the same); null where it does not. */
@@ -121,6 +124,3 @@ const radiusOf = (p: RingVec): number => Math.sqrt(p[0] * p[0] + p[1] * p[1]);
 
 /** Signed ring angle from one point to another, rad in (−π, π]. */
 const angleFrom = (a: RingVec, b: RingVec): number => Math.atan2(a[0] * b[1] - a[1] * b[0], a[0] * b[0] + a[1] * b[1]);
-
-/** Offsets below a picometre are rounding: none. */
-const clean = (offset: number): number => (Math.abs(offset) < 1e-12 ? 0 : offset);
