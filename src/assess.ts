@@ -40,7 +40,14 @@ export function assess(layout: LayoutFile, shipped: readonly CriterionRow[]): As
 	const habitat = resolveHabitat(layout);
 	const world = prepareWorld(habitat);
 	const assessed = cases(layout).map((one) => assessCase(layout, habitat, world, one));
-	return { layout, sha256: sha256(writeLayout(layout)), habitat, cases: assessed, findings: evaluate(layout, habitat, assessed, shipped), overridden: assumptionsOf(layout).overridden };
+	return {
+		layout,
+		sha256: sha256(writeLayout(layout)),
+		habitat,
+		cases: assessed,
+		findings: evaluate(layout, habitat, assessed, shipped),
+		overridden: assumptionsOf(layout).overridden,
+	};
 }
 
 function assessCase(layout: LayoutFile, habitat: Habitat, world: Context["world"], { activity, crew, phase }: Case): AssessedCase {

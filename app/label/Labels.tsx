@@ -1,15 +1,23 @@
 import { useEffect, useLayoutEffect, useMemo, useRef, useState } from "react";
 import type { DropPicture } from "../../src/shape/drop-picture.ts";
+import { usePrinter } from "../panel/print.ts";
 import type { AssessedCase, Finding } from "../store/core.ts";
 import { useDocument } from "../store/document.ts";
 import { weightiest } from "../store/findings.ts";
-import { usePrinter } from "../panel/print.ts";
 import { useSession } from "../store/session.ts";
 import { dropLabels } from "./labels.ts";
 import { type Label, LabelPlacer } from "./place.ts";
 
 /** The labels over the canvas: DOM, so that they stay sharp, can be read out and pressed. The conductor moves them. */
-export function Labels({ shown, picture, onPlacer }: { readonly shown: AssessedCase; readonly picture: DropPicture; readonly onPlacer: (placer: LabelPlacer | null) => void }) {
+export function Labels({
+	shown,
+	picture,
+	onPlacer,
+}: {
+	readonly shown: AssessedCase;
+	readonly picture: DropPicture;
+	readonly onPlacer: (placer: LabelPlacer | null) => void;
+}) {
 	const print = usePrinter();
 	const external = useSession((s) => s.view === "external");
 	const findings = useDocument((s) => s.assessed.findings);
@@ -91,7 +99,15 @@ const OUTSIDE: Readonly<Record<string, string>> = {
 	coamings_struck: "outside: strikes a coaming",
 };
 
-function ScaleBar({ picture, metres, print }: { readonly picture: DropPicture; readonly metres: number; readonly print: (value: number, unit: string) => string }) {
+function ScaleBar({
+	picture,
+	metres,
+	print,
+}: {
+	readonly picture: DropPicture;
+	readonly metres: number;
+	readonly print: (value: number, unit: string) => string;
+}) {
 	const greatest = picture.stage.greatest.centrifugal;
 	const step = greatest > 0 ? 10 ** Math.floor(Math.log10(greatest / 2)) * metres : metres;
 	return (

@@ -47,7 +47,8 @@ type Print = (value: number, unit: string, figures?: number) => string;
 /** "0.30 m against spin", with the axial share where it counts. */
 export function gapWords(gap: NonNullable<Drop["gap"]>, print: Print): string {
 	const parts: string[] = [];
-	if (Math.abs(gap.prograde) >= 0.1 * gap.length) parts.push(`${print(Math.abs(gap.prograde), "m", 2)} ${gap.prograde < 0 ? "against spin" : "with spin"}`);
+	if (Math.abs(gap.prograde) >= 0.1 * gap.length)
+		parts.push(`${print(Math.abs(gap.prograde), "m", 2)} ${gap.prograde < 0 ? "against spin" : "with spin"}`);
 	if (Math.abs(gap.axial) >= 0.1 * gap.length) parts.push(`${print(Math.abs(gap.axial), "m", 2)} along the axis`);
 	return parts.length > 0 ? parts.join(", ") : "no gap";
 }
@@ -57,9 +58,27 @@ export function dropLabels(picture: DropPicture, print: Print, verdict: string |
 	const { drop } = picture.stage;
 	const { gap } = drop;
 	const ten = picture.minorFactor === 10 ? " ×10" : "";
-	const force = (letter: "C" | "K" | "E", text: string): LabelText => ({ anchor: letter, letter, text, look: "chip", tries: ROUND, ...(external ? {} : { hang: "tip" as const }) });
+	const force = (letter: "C" | "K" | "E", text: string): LabelText => ({
+		anchor: letter,
+		letter,
+		text,
+		look: "chip",
+		tries: ROUND,
+		...(external ? {} : { hang: "tip" as const }),
+	});
 	return [
-		...(gap ? [{ anchor: "gap", text: gapWords(gap, print), look: "answer", opens: drop.velocity.every((v) => v === 0) ? "landing_prograde_m" : GAP, tries: BESIDE_GAP, ...(verdict ? { verdict } : {}) } as const] : []),
+		...(gap
+			? [
+					{
+						anchor: "gap",
+						text: gapWords(gap, print),
+						look: "answer",
+						opens: drop.velocity.every((v) => v === 0) ? "landing_prograde_m" : GAP,
+						tries: BESIDE_GAP,
+						...(verdict ? { verdict } : {}),
+					} as const,
+				]
+			: []),
 		force("K", `K${external ? " Coriolis" : ""}${ten}`),
 		force("C", external ? "C centrifugal" : "C"),
 		force("E", `E${external ? " Euler" : ""}${ten}`),

@@ -52,7 +52,8 @@ export class LabelPlacer {
 		this.take(width - this.corner.width, height - this.corner.height, width, height);
 		for (const name of ["landing", "ghost", "object"] as const) {
 			const anchor = picture.anchors[name];
-			if (anchor.visible && this.at(picture, anchor.point, width, height)) this.takeAround(this.pixel[0] as number, this.pixel[1] as number, 13);
+			if (anchor.visible && this.at(picture, anchor.point, width, height))
+				this.takeAround(this.pixel[0] as number, this.pixel[1] as number, 13);
 		}
 		for (let i = 0; i < ARROWS.length; i++) this.keepArrow(picture, ARROWS[i] as AnchorName, width, height);
 		this.firstLabel = this.used;
@@ -136,7 +137,8 @@ export class LabelPlacer {
 		if (cx < label.width / 2 || cy < label.height / 2 || cx > width - label.width / 2 || cy > height - label.height / 2) return false;
 		for (let k = this.firstLabel; k < this.used; k++) {
 			const b = this.boxes[k] as Box;
-			if (cx - label.width / 2 < b.x1 && cx + label.width / 2 > b.x0 && cy - label.height / 2 < b.y1 && cy + label.height / 2 > b.y0) return false;
+			if (cx - label.width / 2 < b.x1 && cx + label.width / 2 > b.x0 && cy - label.height / 2 < b.y1 && cy + label.height / 2 > b.y0)
+				return false;
 		}
 		return true;
 	}

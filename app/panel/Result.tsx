@@ -84,7 +84,7 @@ function Verdict({ c, print }: { readonly c: AssessedCase; readonly print: Print
 					<p className="word">
 						<b>{nameOf(RESULT_WORDS[shown.result])}</b>
 						<span>
-							{shown.force}
+							{shown.force === "information" ? "for information" : `a limit that ${shown.force} be kept`}
 							{shown.basis === "unverified" ? ", unverified, confirm" : ""}
 						</span>
 					</p>

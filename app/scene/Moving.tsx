@@ -4,7 +4,15 @@ import type { Part } from "../../src/shape/drawable.ts";
 import { dispose, setCount, wrap } from "./wrap.ts";
 
 /** What moves, drawn in the order `from`, `from` + 1, …: each frame every part's matrix, count and visibility are copied onto its object. */
-export function Moving({ parts, from, onReady }: { readonly parts: readonly Part[]; readonly from: number; readonly onReady?: () => void }) {
+export function Moving({
+	parts,
+	from,
+	onReady,
+}: {
+	readonly parts: readonly Part[];
+	readonly from: number;
+	readonly onReady?: () => void;
+}) {
 	const objects = useMemo(
 		() =>
 			parts.map((part, i) => {

@@ -1,8 +1,8 @@
 import { useCallback, useEffect, useMemo, useRef, useState } from "react";
+import type { Stars } from "../../src/shape/drawable.ts";
 import { DropFigure } from "../../src/shape/drop-figure.ts";
 import { DropPicture } from "../../src/shape/drop-picture.ts";
 import { DropStage } from "../../src/shape/drop-stage.ts";
-import type { Stars } from "../../src/shape/drawable.ts";
 import { createFigure, type Figure } from "../../src/shape/figure.ts";
 import { StillShapes } from "../../src/shape/still.ts";
 import { FieldOfView } from "../control/FieldOfView.tsx";

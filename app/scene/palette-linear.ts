@@ -2,9 +2,7 @@ import { Color } from "three";
 import { PALETTE } from "../../src/shape/palette.ts";
 
 /** The palette in linear light, 3 a colour, in index order: what vertex colours are made of. */
-export const PALETTE_LINEAR: Float32Array = Float32Array.from(
-	Object.values(PALETTE).flatMap((hex) => new Color(hex).toArray()),
-);
+export const PALETTE_LINEAR: Float32Array = Float32Array.from(Object.values(PALETTE).flatMap((hex) => new Color(hex).toArray()));
 
 /** Vertex colours of colour indices, each repeated `times`. */
 export function linearColours(indices: Uint8Array, times = 1): Float32Array {

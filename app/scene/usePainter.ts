@@ -16,7 +16,12 @@ function asked(): Kind | null {
  * none or WebGL fails, since there the raster is the faster of the two. A canvas keeps its first kind of
  * context, so another painter gets another canvas.
  */
-export function usePainter(conductor: Conductor): { readonly element: ReactElement; readonly kind: Kind | "starting"; readonly lost: boolean; readonly failed: string | null } {
+export function usePainter(conductor: Conductor): {
+	readonly element: ReactElement;
+	readonly kind: Kind | "starting";
+	readonly lost: boolean;
+	readonly failed: string | null;
+} {
 	const canvas = useRef<HTMLCanvasElement>(null);
 	const [kind, setKind] = useState<Kind | "starting">("starting");
 	const [lost, setLost] = useState(false);
@@ -43,10 +48,7 @@ export function usePainter(conductor: Conductor): { readonly element: ReactEleme
 		let live = true;
 		const start = async (): Promise<void> => {
 			try {
-				const made =
-					kind === "webgl"
-						? await (await import("./gl-painter.tsx")).createGlPainter(element)
-						: createRasterPainter(element);
+				const made = kind === "webgl" ? await (await import("./gl-painter.tsx")).createGlPainter(element) : createRasterPainter(element);
 				if (!live) {
 					made.dispose();
 					return;

@@ -1,4 +1,15 @@
-import { BackSide, BufferAttribute, BufferGeometry, DoubleSide, FrontSide, type Material, Mesh, MeshBasicMaterial, MeshLambertMaterial, type Object3D } from "three";
+import {
+	BackSide,
+	BufferAttribute,
+	BufferGeometry,
+	DoubleSide,
+	FrontSide,
+	type Material,
+	Mesh,
+	MeshBasicMaterial,
+	MeshLambertMaterial,
+	type Object3D,
+} from "three";
 import { LineMaterial } from "three/addons/lines/LineMaterial.js";
 import { LineSegments2 } from "three/addons/lines/LineSegments2.js";
 import { LineSegmentsGeometry } from "three/addons/lines/LineSegmentsGeometry.js";

@@ -1,7 +1,7 @@
 import type { World } from "../flight/world.ts";
 import type { Spin } from "../frame/spin.ts";
-import type { CanalConstants } from "../vestibular/constants.ts";
 import type { Habitat } from "../layout/habitat.ts";
+import type { CanalConstants } from "../vestibular/constants.ts";
 
 /** What every activity is computed in: one habitat, one spin, one person. SI. */
 export interface Context {

@@ -7,7 +7,7 @@ import { cylindricalFromRing, localFromRing, ringFromLocal, type Triad } from ".
 import { angleNear, deckTriad, placeOnDeck, type WindowOpening } from "../layout/habitat.ts";
 import { degFromRad, gFromMps2 } from "../quantity/convert.ts";
 import { written } from "../quantity/round.ts";
-import { add, dot, type HeadVec, head, length, type LocalVec, local, type RingVec, ring, scale, sub } from "../vector/vec3.ts";
+import { add, dot, type HeadVec, head, type LocalVec, length, local, type RingVec, ring, scale, sub } from "../vector/vec3.ts";
 import type { CanalConstants } from "../vestibular/constants.ts";
 import { canalReport } from "../vestibular/report.ts";
 import type { Context } from "./context.ts";
@@ -41,10 +41,19 @@ export function dropSeries(context: Context, drop: Drop, canals: CanalConstants)
 	const heads = headSamples(context, drop, triad, times);
 	const turns = turnRates(heads, step);
 	const spinAxis = heads.map((h) => head(h.axes[0][2], h.axes[1][2], h.axes[2][2]));
-	const omega = (i: number, withSpin: boolean): HeadVec => (withSpin ? add(turns[i] as HeadVec, scale(spinAxis[i] as HeadVec, spin.rate(i * step))) : (turns[i] as HeadVec));
+	const omega = (i: number, withSpin: boolean): HeadVec =>
+		withSpin ? add(turns[i] as HeadVec, scale(spinAxis[i] as HeadVec, spin.rate(i * step))) : (turns[i] as HeadVec);
 	const samples = { from: 0, step, count };
-	const report = canalReport(between(count, step, (i) => omega(i, true)), samples, canals);
-	const still = canalReport(between(count, step, (i) => omega(i, false)), samples, canals);
+	const report = canalReport(
+		between(count, step, (i) => omega(i, true)),
+		samples,
+		canals,
+	);
+	const still = canalReport(
+		between(count, step, (i) => omega(i, false)),
+		samples,
+		canals,
+	);
 	const size = (a: Float64Array, i: number, b?: Float64Array): number =>
 		Math.hypot(...[0, 1, 2].map((k) => (a[3 * i + k] as number) - (b ? (b[3 * i + k] as number) : 0)));
 	const at = (i: number): HeadVec => head(report[3 * i] as number, report[3 * i + 1] as number, report[3 * i + 2] as number);
@@ -52,7 +61,8 @@ export function dropSeries(context: Context, drop: Drop, canals: CanalConstants)
 	const stand = times.map((t) => localFromRing(triad, apparentParts(spin, t, stance.position, ring(0, 0, 0), ring(0, 0, 0)).sum));
 	const object = times.map((t) => objectSample(context, drop, t));
 	const numbers = (f: (i: number) => number): number[] => times.map((_, i) => written(f(i)));
-	const directions = (f: (i: number) => number): (number | null)[] => times.map((_, i) => (length(stand[i] as LocalVec) > 0 ? written(f(i)) : null));
+	const directions = (f: (i: number) => number): (number | null)[] =>
+		times.map((_, i) => (length(stand[i] as LocalVec) > 0 ? written(f(i)) : null));
 	const vectors = (f: (i: number) => LocalVec): number[][] => times.map((_, i) => [...f(i)].map(written));
 	const down = (i: number): number => -(stand[i] as LocalVec)[1];
 	const perSecond = (radps: number): number => degFromRad(radps);
@@ -107,7 +117,8 @@ function headOf(pose: Pose, drop: Drop, triad: Triad): HeadSample {
 	const s = Math.sin(facing);
 	const turned = (forward: number, up: number, right: number): LocalVec => local(c * forward - s * right, up, s * forward + c * right);
 	const o = 16 * trunk("head");
-	const axis = (k: number): LocalVec => turned(pose.world[o + 4 * k] as number, pose.world[o + 4 * k + 1] as number, pose.world[o + 4 * k + 2] as number);
+	const axis = (k: number): LocalVec =>
+		turned(pose.world[o + 4 * k] as number, pose.world[o + 4 * k + 1] as number, pose.world[o + 4 * k + 2] as number);
 	const centre = new Float64Array(3);
 	headCentre(pose, centre);
 	return {

@@ -10,7 +10,7 @@ import { degFromRad, radFromDeg, rpmFromRadps } from "../quantity/convert.ts";
 import { type LocalVec, type RingVec, ring, scale } from "../vector/vec3.ts";
 import type { Context } from "./context.ts";
 import type { CaseSummary, Derivation } from "./result.ts";
-import { givenStance, stanceAtHand, type Stance } from "./stance.ts";
+import { givenStance, type Stance, stanceAtHand } from "./stance.ts";
 import { derive, put, SummaryWriter } from "./summary.ts";
 
 export type { Path } from "../flight/path.ts";
@@ -61,7 +61,10 @@ export function computeDrop(context: Context, file: DropFile): Drop {
 		flight,
 		landing: found,
 		ghost,
-		gap: flight.struck.kind === "deck" && flight.struck.deck === deck.index && found && ghost.point ? gapBetween(deck, ghost.point, found.point) : null,
+		gap:
+			flight.struck.kind === "deck" && flight.struck.deck === deck.index && found && ghost.point
+				? gapBetween(deck, ghost.point, found.point)
+				: null,
 		drag,
 		stance,
 		fromFeet: found && stance.given ? fromFeet(habitat, flight, found, deck, position, stance.position) : null,
@@ -135,7 +138,10 @@ export function summariseDrop(context: Context, file: DropFile, drop: Drop): Cas
 	const none = flight.struck.kind === "outside" ? LEFT : NOTHING_STRUCK;
 	const start = cylindricalFromRing(drop.position);
 	const how = flightDerivation(context, file, drop, start);
-	const struck = derive("first-contact", [put("d", "diameter of the object", object.diameter, "m"), put("h", "height of its centre at the release", file.from.height_m, "m")]);
+	const struck = derive("first-contact", [
+		put("d", "diameter of the object", object.diameter, "m"),
+		put("h", "height of its centre at the release", file.from.height_m, "m"),
+	]);
 	const parts = found ? arrival(deckOfStrike(context, drop), flight) : null;
 	const speedParts = parts
 		? [
@@ -153,9 +159,17 @@ export function summariseDrop(context: Context, file: DropFile, drop: Drop): Cas
 		"landing_axial_m",
 		found?.axial ?? null,
 		found ? "an end bulkhead has no axial direction of its own" : none,
-		derive("landing-axial", [put("z_touched", "axial place of the point touched", found?.point[2] ?? "none", "m"), put("z_release", "axial place of the release", file.from.axial_m, "m")]),
+		derive("landing-axial", [
+			put("z_touched", "axial place of the point touched", found?.point[2] ?? "none", "m"),
+			put("z_release", "axial place of the release", file.from.axial_m, "m"),
+		]),
 	);
-	writer.number("landing_radius_m", found?.radius ?? null, none, derive("landing-radius", [put("r", "radius", found?.radius ?? "none", "m")]));
+	writer.number(
+		"landing_radius_m",
+		found?.radius ?? null,
+		none,
+		derive("landing-radius", [put("r", "radius", found?.radius ?? "none", "m")]),
+	);
 	writer.number("landing_speed_mps", found?.speed ?? null, none, derive("landing-speed", speedParts));
 	writer.number(
 		"landing_angle_deg",
@@ -164,7 +178,12 @@ export function summariseDrop(context: Context, file: DropFile, drop: Drop): Cas
 		derive("landing-angle", [put("v_down", "part of the velocity along down", parts ? -parts[1] : "none", "m/s"), speed]),
 	);
 	feetNumbers(writer, drop, none);
-	writer.number("impact_energy_J", found ? 0.5 * object.mass * found.speed ** 2 : null, none, derive("impact-energy", [put("m", "mass of the object", object.mass, "kg"), speed]));
+	writer.number(
+		"impact_energy_J",
+		found ? 0.5 * object.mass * found.speed ** 2 : null,
+		none,
+		derive("impact-energy", [put("m", "mass of the object", object.mass, "kg"), speed]),
+	);
 	writer.number(
 		"equal_earth_drop_m",
 		found ? found.speed ** 2 / (2 * STANDARD_GRAVITY) : null,
@@ -192,7 +211,12 @@ export function summariseDrop(context: Context, file: DropFile, drop: Drop): Cas
 		const offset = (kind: "prograde" | "axial", from: number | null): Derivation =>
 			derive("from-feet", [
 				put("s", "offset from the point below the release", from ?? "none", "m"),
-				put("s_release − s_feet₀", "from the feet to the point below the release", from !== null && d.fromFeet?.[kind] != null ? d.fromFeet[kind] - from : "none", "m"),
+				put(
+					"s_release − s_feet₀",
+					"from the feet to the point below the release",
+					from !== null && d.fromFeet?.[kind] != null ? d.fromFeet[kind] - from : "none",
+					"m",
+				),
 			]);
 		const bulkhead = found && d.stance.given ? "that bulkhead has no such direction of its own" : missing;
 		to.number("landing_from_feet_prograde_m", d.fromFeet?.prograde ?? null, bulkhead, offset("prograde", found?.prograde ?? null));
@@ -219,7 +243,8 @@ export function summariseDrop(context: Context, file: DropFile, drop: Drop): Cas
 			);
 		}
 		const atRest = d.velocity.every((v) => v === 0);
-		const plain = atRest && deck.floor === "curved" && flight.passed.length === 0 && flight.struck.kind === "deck" && spin.constant && spin.rate(0) > 0;
+		const plain =
+			atRest && deck.floor === "curved" && flight.passed.length === 0 && flight.struck.kind === "deck" && spin.constant && spin.rate(0) > 0;
 		if (plain) {
 			const reach = deck.radius - object.diameter / 2;
 			return derive(
@@ -234,7 +259,11 @@ export function summariseDrop(context: Context, file: DropFile, drop: Drop): Cas
 				["The object is a sphere.", "Air drag is switched off for this activity."],
 			);
 		}
-		return derive("free-flight", [r0, v0, rate, put("t", "time of the first contact", found ? flight.end : "none", "s")], ["The object is a sphere.", "Air drag is switched off for this activity."]);
+		return derive(
+			"free-flight",
+			[r0, v0, rate, put("t", "time of the first contact", found ? flight.end : "none", "s")],
+			["The object is a sphere.", "Air drag is switched off for this activity."],
+		);
 	}
 }
 

@@ -27,7 +27,8 @@ export const givenStance = (deck: Deck, angle: number, axial: number, facing: nu
 /** The stance that puts a hand at a ring position with the elbow comfortably bent, as far as the bay has room. */
 export function stanceAtHand(deck: Deck, hand: RingVec, stature: number, facing: number): Stance {
 	const offset = defaultFeet(heightAbove(deck, hand), stature, facing);
-	const within = (value: number, from: number, to: number): number => (to - from < 2 * CLEAR ? (from + to) / 2 : Math.min(Math.max(value, from + CLEAR), to - CLEAR));
+	const within = (value: number, from: number, to: number): number =>
+		to - from < 2 * CLEAR ? (from + to) / 2 : Math.min(Math.max(value, from + CLEAR), to - CLEAR);
 	let along = floorAlong(deck, angleNear(Math.atan2(hand[1], hand[0]), deck.middle)) + offset.prograde;
 	if (!deck.closed) along = within(along, floorAlong(deck, deck.from), floorAlong(deck, deck.to));
 	const axial = within(hand[2] + offset.axial, deck.axialFrom, deck.axialTo);

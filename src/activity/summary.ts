@@ -1,6 +1,6 @@
 import { written } from "../quantity/round.ts";
-import type { CaseSummary, Derivation, DerivationInput, SummaryValue } from "./result.ts";
 import type { FormulaId } from "./formula.ts";
+import type { CaseSummary, Derivation, DerivationInput, SummaryValue } from "./result.ts";
 
 /** Collects the summary of a case: every number rounded as written, every null with its reason. */
 export class SummaryWriter {

@@ -2,7 +2,7 @@ import type { Drop } from "../activity/drop.ts";
 import type { CaseSummary } from "../activity/result.ts";
 import { cylindricalFromRing } from "../frame/place.ts";
 import { angleNear, type Deck, type Habitat, heightAbove } from "../layout/habitat.ts";
-import { NOMINAL, type LayoutFile } from "../layout/schema.ts";
+import { type LayoutFile, NOMINAL } from "../layout/schema.ts";
 import { degFromRad, radpsFromRpm } from "../quantity/convert.ts";
 import { written } from "../quantity/round.ts";
 import { ring } from "../vector/vec3.ts";
@@ -78,7 +78,12 @@ function deckFindings(layout: LayoutFile, habitat: Habitat, row: CriterionRow): 
 				subject: deck.id,
 				crew: known?.needsCrew ? (tallest?.id ?? null) : null,
 				phase,
-				at: { deck: deck.id, angle_deg: written(degFromRad(deck.middle)), axial_m: written((deck.axialFrom + deck.axialTo) / 2), height_m: 0 },
+				at: {
+					deck: deck.id,
+					angle_deg: written(degFromRad(deck.middle)),
+					axial_m: written((deck.axialFrom + deck.axialTo) / 2),
+					height_m: 0,
+				},
 			};
 			if (!known) return judge(row, who, { value: null, reason: `"${row.quantity}" is not a quantity of the habitat` }, "sustained");
 			if (known.needsCrew && !tallest) return judge(row, who, { value: null, reason: "the layout has no crew" }, "sustained");

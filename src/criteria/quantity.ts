@@ -8,7 +8,9 @@ import { rpmFromRadps } from "../quantity/convert.ts";
 export type Quantity = { readonly value: number } | { readonly value: null; readonly reason: string };
 
 /** The standing quantities of a deck at one spin rate (rad/s) for a stature (m). */
-export const DECK_QUANTITIES: Readonly<Record<string, { readonly unit: string; readonly needsCrew: boolean; of(deck: Deck, rate: number, stature: number): number }>> = {
+export const DECK_QUANTITIES: Readonly<
+	Record<string, { readonly unit: string; readonly needsCrew: boolean; of(deck: Deck, rate: number, stature: number): number }>
+> = {
 	spin_rate_rpm: { unit: "rpm", needsCrew: false, of: (_deck, rate) => rpmFromRadps(rate) },
 	floor_level_g: { unit: "g", needsCrew: false, of: (deck, rate) => (rate * rate * deck.radius) / STANDARD_GRAVITY },
 	rim_speed_mps: { unit: "m/s", needsCrew: false, of: (deck, rate) => rate * deck.radius },

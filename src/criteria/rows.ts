@@ -31,7 +31,9 @@ export function rowsFor(layout: LayoutFile, shipped: readonly CriterionRow[]): {
 	return {
 		rows: rows.map((row) => {
 			const change = tailored.get(row.id);
-			return change ? { ...row, limit: change.limit, note: `${row.note} Tailored from ${row.limit} ${row.unit}: ${change.reason}`.trim() } : row;
+			return change
+				? { ...row, limit: change.limit, note: `${row.note} Tailored from ${row.limit} ${row.unit}: ${change.reason}`.trim() }
+				: row;
 		}),
 		missing: use.filter((set) => !known.has(set)),
 	};

@@ -9,7 +9,11 @@ export interface Cylindrical {
 
 export const ringFromCylindrical = (p: Cylindrical): RingVec => ring(p.radius * Math.cos(p.angle), p.radius * Math.sin(p.angle), p.axial);
 /** The angle is in (−π, π]. */
-export const cylindricalFromRing = (p: RingVec): Cylindrical => ({ radius: Math.hypot(p[0], p[1]), angle: Math.atan2(p[1], p[0]), axial: p[2] });
+export const cylindricalFromRing = (p: RingVec): Cylindrical => ({
+	radius: Math.hypot(p[0], p[1]),
+	angle: Math.atan2(p[1], p[0]),
+	axial: p[2],
+});
 
 /** A right-handed triad of unit ring vectors: prograde, up (inboard), axial. */
 export interface Triad {

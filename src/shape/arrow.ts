@@ -41,7 +41,11 @@ export function createArrow(letter: ArrowLetter): Arrow {
 	if (look.stroke === "dashed" || look.stroke === "dotted") shafts.push(shaft(COLOUR.halo, look.width, null));
 	shafts.push(shaft(look.colour, look.width, DASH[look.stroke]));
 	if (look.stroke === "double") shafts.push(shaft(COLOUR.halo, look.width / 3, null));
-	const heads = [part(cone(`head ${letter} halo`, COLOUR.halo, 1.3, 0.62, -0.14)), part(cone(`head ${letter} edge`, COLOUR.ink, 1.16, 0.5, -0.06)), part(cone(`head ${letter}`, look.colour, 1, 0.38, 0))];
+	const heads = [
+		part(cone(`head ${letter} halo`, COLOUR.halo, 1.3, 0.62, -0.14)),
+		part(cone(`head ${letter} edge`, COLOUR.ink, 1.16, 0.5, -0.06)),
+		part(cone(`head ${letter}`, look.colour, 1, 0.38, 0)),
+	];
 	const parts = [...shafts.slice(0, 1), heads[0] as Part, ...shafts.slice(1), ...heads.slice(1)];
 	const arrow: Arrow = {
 		letter,
@@ -56,7 +60,8 @@ export function createArrow(letter: ArrowLetter): Arrow {
 			const size = Math.min(head, length * 0.6);
 			const stem = length - size * 0.8;
 			for (const p of shafts) placeAlong(p.matrix, x, y, z, dx, dy, dz, stem, 1);
-			for (const p of heads) placeAlong(p.matrix, x + dx * (length - size), y + dy * (length - size), z + dz * (length - size), dx, dy, dz, size, size);
+			for (const p of heads)
+				placeAlong(p.matrix, x + dx * (length - size), y + dy * (length - size), z + dz * (length - size), dx, dy, dz, size, size);
 			arrow.tip[0] = x + dx * length;
 			arrow.tip[1] = y + dy * length;
 			arrow.tip[2] = z + dz * length;

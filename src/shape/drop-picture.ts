@@ -1,9 +1,9 @@
 import { type Arrow, createArrow } from "./arrow.ts";
 import { facesFromBehind } from "./bay.ts";
 import { aim, type Camera, createCamera, project } from "./camera.ts";
+import type { Part } from "./drawable.ts";
 import type { DropFigure } from "./drop-figure.ts";
 import type { DropStage } from "./drop-stage.ts";
-import type { Part } from "./drawable.ts";
 import { createAxisCue, createPanel, createPlumb, hudDirection, hudPoint, metresPerPixel } from "./hud.ts";
 import { fromStage } from "./stage-frame.ts";
 
@@ -31,7 +31,22 @@ export interface Anchor {
 	visible: boolean;
 }
 
-export const ANCHORS = ["gap", "landing", "ghost", "object", "C", "K", "E", "prograde", "up", "axial", "rose", "rose-bar", "plumb", "axes"] as const;
+export const ANCHORS = [
+	"gap",
+	"landing",
+	"ghost",
+	"object",
+	"C",
+	"K",
+	"E",
+	"prograde",
+	"up",
+	"axial",
+	"rose",
+	"rose-bar",
+	"plumb",
+	"axes",
+] as const;
 export type AnchorName = (typeof ANCHORS)[number];
 
 const AXIS_NAMES = ["prograde", "up", "axial"] as const;
@@ -231,7 +246,16 @@ export class DropPicture {
 		if (this.onRose) hudDirection(this.camera, this.arrowOrigin, force[0] as number, force[1] as number, force[2] as number, v);
 		else v.set(force);
 		const l = Math.max(1e-9, Math.hypot(v[0] as number, v[1] as number, v[2] as number));
-		arrow.set(o[0] as number, o[1] as number, o[2] as number, (v[0] as number) / l, (v[1] as number) / l, (v[2] as number) / l, l * scale, head);
+		arrow.set(
+			o[0] as number,
+			o[1] as number,
+			o[2] as number,
+			(v[0] as number) / l,
+			(v[1] as number) / l,
+			(v[2] as number) / l,
+			l * scale,
+			head,
+		);
 		anchor.visible = arrow.visible;
 		anchor.point.set(arrow.tip);
 	}
@@ -270,7 +294,17 @@ export class DropPicture {
 		if (room) this.plumbPanel.set(camera, width, height, plumbX, plumbY);
 		if (room && weight) {
 			const g = stage.plumb;
-			this.plumb.set(camera, width, height, plumbX, plumbY - PLUMB.height / 2 + 26, PLUMB.long, g[0] as number, g[1] as number, g[2] as number);
+			this.plumb.set(
+				camera,
+				width,
+				height,
+				plumbX,
+				plumbY - PLUMB.height / 2 + 26,
+				PLUMB.long,
+				g[0] as number,
+				g[1] as number,
+				g[2] as number,
+			);
 		}
 		anchors.plumb.visible = room;
 		hudPoint(camera, width, height, plumbX, plumbY + PLUMB.height / 2 - 26, anchors.plumb.point);

@@ -74,7 +74,14 @@ export class DropStage {
 		this.gapParts = marks.gap;
 		this.landing = drop.landing ? this.stagePoint(drop.landing.point) : null;
 		this.ghostLanding = drop.ghost.point ? this.stagePoint(drop.ghost.point) : null;
-		this.parts = [...this.ghostLanded, ...this.gapParts, ...this.landed, ...(ghost ? ghost.parts : []), ...trail.parts, ...this.objectParts];
+		this.parts = [
+			...this.ghostLanded,
+			...this.gapParts,
+			...this.landed,
+			...(ghost ? ghost.parts : []),
+			...trail.parts,
+			...this.objectParts,
+		];
 		this.bounds = { low: new Float64Array([-0.3, -0.05, -0.3]), high: new Float64Array([0.3, 1.85, 0.3]) };
 		this.measure();
 	}
@@ -93,7 +100,7 @@ export class DropStage {
 		return out;
 	}
 
-	private marks(): { landed: readonly Part[]; ghostLanded: readonly Part[]; gap: readonly Part[]; } {
+	private marks(): { landed: readonly Part[]; ghostLanded: readonly Part[]; gap: readonly Part[] } {
 		const { drop, frame, habitat } = this;
 		const { struck } = drop.flight;
 		const radius = Math.min(0.09, Math.max(0.03, drop.object.diameter / 2));

@@ -1,4 +1,4 @@
-import { floorAlong, floorAngle, placeOnDeck, type Deck } from "../layout/habitat.ts";
+import { type Deck, floorAlong, floorAngle, placeOnDeck } from "../layout/habitat.ts";
 import type { RingVec } from "../vector/vec3.ts";
 import type { Part } from "./drawable.ts";
 import { LineBuilder, MeshBuilder } from "./mesh.ts";
@@ -52,7 +52,8 @@ export function landingMark(frame: StageFrame, deck: Deck, at: FloorPoint, radiu
 /** Where it would have landed without turning: an open ring. */
 export function ghostMark(frame: StageFrame, deck: Deck, at: FloorPoint, radius: number): readonly Part[] {
 	const mesh = new MeshBuilder();
-	for (let i = 0; i < 12; i++) arc(mesh, frame, deck, at, radius * 1.6, radius * 2.0, (i * Math.PI) / 6, (i * Math.PI) / 6 + Math.PI / 10, LIFT + 0.001, COLOUR.muted);
+	for (let i = 0; i < 12; i++)
+		arc(mesh, frame, deck, at, radius * 1.6, radius * 2.0, (i * Math.PI) / 6, (i * Math.PI) / 6 + Math.PI / 10, LIFT + 0.001, COLOUR.muted);
 	disc(mesh, frame, deck, at, 0, radius * 0.4, LIFT + 0.001, COLOUR.muted);
 	return [part(mesh.build("ghost landing", { lit: false, decal: true, side: "both" }))];
 }
@@ -92,7 +93,16 @@ export function gapLine(frame: StageFrame, deck: Deck, from: FloorPoint, to: Flo
 	return [part(mesh.build("gap", { lit: false, decal: true, side: "both" }))];
 }
 
-function disc(mesh: MeshBuilder, frame: StageFrame, deck: Deck, at: FloorPoint, inner: number, outer: number, lift: number, colour: ColourIndex): void {
+function disc(
+	mesh: MeshBuilder,
+	frame: StageFrame,
+	deck: Deck,
+	at: FloorPoint,
+	inner: number,
+	outer: number,
+	lift: number,
+	colour: ColourIndex,
+): void {
 	arc(mesh, frame, deck, at, inner, outer, 0, 2 * Math.PI, lift, colour);
 }
 

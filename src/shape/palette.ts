@@ -36,6 +36,4 @@ const names = Object.keys(PALETTE) as ColourName[];
 /** Index of each colour by name. */
 export const COLOUR = Object.fromEntries(names.map((n, i) => [n, i])) as Record<ColourName, ColourIndex>;
 /** sRGB bytes, 3 a colour, in index order. */
-export const PALETTE_BYTES = new Uint8Array(
-	names.flatMap((n) => [1, 3, 5].map((k) => Number.parseInt(PALETTE[n].slice(k, k + 2), 16))),
-);
+export const PALETTE_BYTES = new Uint8Array(names.flatMap((n) => [1, 3, 5].map((k) => Number.parseInt(PALETTE[n].slice(k, k + 2), 16))));

@@ -1,5 +1,5 @@
-import { deckTriad, type Deck, placeOnDeck } from "../layout/habitat.ts";
 import type { Triad } from "../frame/place.ts";
+import { type Deck, deckTriad, placeOnDeck } from "../layout/habitat.ts";
 import { type RingVec, ring } from "../vector/vec3.ts";
 
 /**
@@ -44,9 +44,5 @@ export function putDirection(frame: StageFrame, x: number, y: number, z: number,
 /** The ring position of stage coordinates. */
 export function fromStage(frame: StageFrame, x: number, y: number, z: number): RingVec {
 	const { origin, triad } = frame;
-	return ring(
-		origin[0] + x * triad.prograde[0] + y * triad.up[0],
-		origin[1] + x * triad.prograde[1] + y * triad.up[1],
-		origin[2] + z,
-	);
+	return ring(origin[0] + x * triad.prograde[0] + y * triad.up[0], origin[1] + x * triad.prograde[1] + y * triad.up[1], origin[2] + z);
 }

@@ -88,4 +88,11 @@ function dot(mesh: MeshBuilder, centre: readonly number[], radius: number, colou
 }
 
 export const OBJECT_TRAIL: TrailLook = { name: "trail", colour: COLOUR.ink, width: 2.2, dotRadius: 0.0085, dash: null, opacity: 1 };
-export const GHOST_TRAIL: TrailLook = { name: "ghost", colour: COLOUR.muted, width: 1.6, dotRadius: 0.006, dash: [0.035, 0.03], opacity: 0.6 };
+export const GHOST_TRAIL: TrailLook = {
+	name: "ghost",
+	colour: COLOUR.muted,
+	width: 1.6,
+	dotRadius: 0.006,
+	dash: [0.035, 0.03],
+	opacity: 0.6,
+};
