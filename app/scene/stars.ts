@@ -50,7 +50,7 @@ export function wrapStars(stars: Stars): Points<BufferGeometry, ShaderMaterial> 
 /** Turns the sky: ICRS → stage, 9 numbers, row by row. */
 export function turnStars(points: Points<BufferGeometry, ShaderMaterial>, rotation: Float64Array, pixelRatio: number): void {
 	const r = rotation;
-	(points.material.uniforms.sky?.value as Matrix3).set(
+	(points.material.uniforms.sky as { value: Matrix3 }).value.set(
 		r[0] as number,
 		r[1] as number,
 		r[2] as number,

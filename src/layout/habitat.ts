@@ -118,14 +118,6 @@ export interface Workstation {
 	readonly solid: boolean;
 }
 
-/** A place above a deck: floor point of `angle`, `height` along the deck's own up. */
-export interface DeckPlace {
-	readonly deck: number;
-	readonly angle: number;
-	readonly axial: number;
-	readonly height: number;
-}
-
 /** The directions in force at a floor angle: of a curved floor the local ones, of a flat one the deck's own. */
 export const deckTriad = (deck: Deck, angle: number): Triad => triadAt(deck.floor === "curved" ? angle : deck.middle);
 

@@ -6,5 +6,4 @@ export const degFromRad = (rad: number): number => (rad * 180) / Math.PI;
 export const radpsFromRpm = (rpm: number): number => (rpm * TAU) / 60;
 export const rpmFromRadps = (radps: number): number => (radps * 60) / TAU;
 export const gFromMps2 = (mps2: number): number => mps2 / STANDARD_GRAVITY;
-export const mps2FromG = (g: number): number => g * STANDARD_GRAVITY;
 export const kelvinFromCelsius = (celsius: number): number => celsius + 273.15;

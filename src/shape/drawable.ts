@@ -3,7 +3,6 @@
  * CPU raster and paper draw the same picture. All positions are stage coordinates in metres
  * (see stage-frame.ts: x prograde, y up, z axial at the station), colours index PALETTE.
  */
-import type { ColourIndex } from "./palette.ts";
 
 export interface Triangles {
 	readonly kind: "triangles";
@@ -67,6 +66,3 @@ export interface Part {
 	/** Absent is visible. */
 	visible?: boolean;
 }
-
-/** The palette entry a caller names, checked by the type. */
-export type Coloured = { readonly colour: ColourIndex };

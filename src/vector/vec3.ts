@@ -11,7 +11,6 @@ export type Frame = "ring" | "inertial" | "icrs" | "head" | "local";
 export type Vec3<F extends Frame> = readonly [number, number, number] & { readonly [frame]: F };
 
 export type RingVec = Vec3<"ring">;
-export type InertialVec = Vec3<"inertial">;
 export type IcrsVec = Vec3<"icrs">;
 export type HeadVec = Vec3<"head">;
 /** Components [prograde, up, axial]. */
@@ -19,7 +18,6 @@ export type LocalVec = Vec3<"local">;
 
 const make = <F extends Frame>(x: number, y: number, z: number): Vec3<F> => [x, y, z] as unknown as Vec3<F>;
 export const ring = make<"ring">;
-export const inertial = make<"inertial">;
 export const icrs = make<"icrs">;
 export const head = make<"head">;
 export const local = make<"local">;
