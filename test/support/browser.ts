@@ -41,19 +41,27 @@ export function watchConsole(page: Page): string[] {
 
 export interface OpenApp {
 	readonly page: Page;
+	/** What the page has said so far. */
+	readonly said: readonly string[];
 	/** Fails where the page has said anything but the allowed warning; call it last. */
 	readonly expectClean: () => void;
 	readonly close: () => Promise<void>;
 }
 
-/** Opens the app in a context of its own, 1440 x 900 unless told, and waits until its scripts and fonts are there. */
-export async function openApp(browser: Browser, url: string, options: BrowserContextOptions = {}): Promise<OpenApp> {
+/** Opens the app in a context of its own, 1440 x 900 unless told, and waits until its scripts and fonts are there. `prepare` comes before the first request. */
+export async function openApp(
+	browser: Browser,
+	url: string,
+	options: BrowserContextOptions = {},
+	prepare?: (page: Page) => Promise<unknown>,
+): Promise<OpenApp> {
 	const context = await browser.newContext({ viewport: { width: 1440, height: 900 }, ...options });
 	const page = await context.newPage();
 	const said = watchConsole(page);
+	await prepare?.(page);
 	await page.goto(url, { waitUntil: "load" });
 	await page.evaluate(async () => {
 		await document.fonts.ready;
 	});
-	return { page, expectClean: () => assert.deepEqual(said, [], "what the page said"), close: () => context.close() };
+	return { page, said, expectClean: () => assert.deepEqual(said, [], "what the page said"), close: () => context.close() };
 }
