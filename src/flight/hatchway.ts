@@ -134,12 +134,13 @@ class AxialCoaming implements CoamingSurface {
 		this.id = way.hatch.id;
 	}
 
-	/** The nearest point of the wall in its own plane, for a centre whose angle lies within the hatch. */
+	/** The nearest point of the wall in its own plane. */
 	private nearest(s: State): readonly [number, number] {
 		const x = s[0] as number;
 		const y = s[1] as number;
-		const r = Math.hypot(x, y);
-		const angle = Math.min(this.high, Math.max(this.low, angleNear(Math.atan2(y, x), this.way.hatch.angle)));
+		const own = angleNear(Math.atan2(y, x), this.way.hatch.angle);
+		const angle = Math.min(this.high, Math.max(this.low, own));
+		const r = own === angle ? Math.sqrt(x * x + y * y) : x * Math.cos(angle) + y * Math.sin(angle);
 		if (r < this.way.top(angle)) return nearestOnLine(this.way.deck, 0, x, y, angle, this.low, this.high);
 		if (r > this.way.bottom(angle)) {
 			const { below, deck } = this.way;

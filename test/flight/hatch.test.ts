@@ -151,6 +151,21 @@ describe.each([
 		expect(along).toMatchObject({ struck: "deck:lower", passed: ["h"] });
 	});
 
+	it("does not hide the end of the bay below from what is half through it", () => {
+		/** Up 0.75 m and 0.1 m towards the end: there it is met 0.15 m short of the ceiling, before the wall flush with it. */
+		const flush = bay({ ...hatch, axial_m: 3 - 0.4 });
+		const { drop, summary } = thrown(flush, {
+			deck: "lower",
+			height: 1.5,
+			axial: 2.6,
+			diameter: 0.6,
+			elevation: (Math.atan(7.5) * 180) / Math.PI,
+			heading: 90,
+		});
+		expect(summary).toMatchObject({ struck: "end-high:lower", passed: [], landing_axial_m: null });
+		expect(Math.hypot(drop.flight.state[0]!, drop.flight.state[1]!)).toBeCloseTo(30.75, 9);
+	});
+
 	it("has no length where ceiling and floor are one", () => {
 		const one = bay(hatch, { decks: decks({}, { headroom_m: 3 }) });
 		expect(thrown(one, {}).summary).toMatchObject({ struck: "deck:lower", passed: ["h"] });

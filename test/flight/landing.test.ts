@@ -389,6 +389,9 @@ describe("solid panes", () => {
 			struck(flatDeck, { surface: "side-high", axial_m: 0, height_m: 1.2 }, { angle: 25, axial: 0, height }, 0, 0);
 		expect(side(1.2 + 0.29 * slope)).toBe("element:w");
 		expect(side(1.2 + 0.31 * slope)).toBe("side-high:lower");
+		const low = (height: number) =>
+			struck(flatDeck, { surface: "side-low", axial_m: 0, height_m: 1.2 }, { angle: -25, axial: 0, height }, 180, 0);
+		expect([low(1.2 - 0.29 * slope), low(1.2 - 0.31 * slope)]).toEqual(["element:w", "side-low:lower"]);
 		expect(struck(curved, { surface: "side-low", axial_m: 0.5, height_m: 1.2 }, { angle: -19.9, axial: 0.99, height: 1.21 }, 180, 0)).toBe(
 			"element:w",
 		);
