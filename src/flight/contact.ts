@@ -1,5 +1,5 @@
 import type { Spin } from "../frame/spin.ts";
-import { type Bounds, type Path, ringBounds, type State } from "./path.ts";
+import { type Bounds, type Path, ringBounds } from "./path.ts";
 import type { Surface } from "./surface.ts";
 
 /** A gap this small (m) is contact: a body that starts there starts touching. */
@@ -34,7 +34,13 @@ const bounds: Bounds = { radius: 0, speed: 0, acceleration: 0 };
  * rate may fall, which converges quadratically on a simple root and cannot tunnel.
  * A surface in `leaving` is touched already; it counts again once its gap has opened.
  */
-export function firstContact(stretch: Stretch, surfaces: readonly Surface[], from: number, to: number, leaving: Set<Surface>): Contact | null {
+export function firstContact(
+	stretch: Stretch,
+	surfaces: readonly Surface[],
+	from: number,
+	to: number,
+	leaving: Set<Surface>,
+): Contact | null {
 	const { path, spin } = stretch;
 	let t = from;
 	let before = from;

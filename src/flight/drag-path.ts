@@ -62,7 +62,15 @@ export class DragPath implements Path {
 
 	/** One Dormand–Prince step of `h` from `y` at `t`, k[0] given; fills k[1…6], writes the fifth-order end. */
 	private stage(t: number, y: Float64Array, h: number, end: Float64Array): void {
-		const [k1, k2, k3, k4, k5, k6, k7] = this.k as [Float64Array, Float64Array, Float64Array, Float64Array, Float64Array, Float64Array, Float64Array];
+		const [k1, k2, k3, k4, k5, k6, k7] = this.k as [
+			Float64Array,
+			Float64Array,
+			Float64Array,
+			Float64Array,
+			Float64Array,
+			Float64Array,
+			Float64Array,
+		];
 		const s = this.scratch;
 		const at = (i: number) => y[i] as number;
 		const v = (a: Float64Array, i: number) => a[i] as number;
@@ -88,12 +96,7 @@ export class DragPath implements Path {
 		for (let i = 0; i < 6; i++)
 			end[i] =
 				at(i) +
-				h *
-					((35 / 384) * v(k1, i) +
-						(500 / 1113) * v(k3, i) +
-						(125 / 192) * v(k4, i) -
-						(2187 / 6784) * v(k5, i) +
-						(11 / 84) * v(k6, i));
+				h * ((35 / 384) * v(k1, i) + (500 / 1113) * v(k3, i) + (125 / 192) * v(k4, i) - (2187 / 6784) * v(k5, i) + (11 / 84) * v(k6, i));
 		this.derivative(t + h, end, k7);
 	}
 
@@ -118,7 +121,15 @@ export class DragPath implements Path {
 	}
 
 	private stepError(h: number, end: Float64Array): number {
-		const [k1, , k3, k4, k5, k6, k7] = this.k as Float64Array[] as [Float64Array, Float64Array, Float64Array, Float64Array, Float64Array, Float64Array, Float64Array];
+		const [k1, , k3, k4, k5, k6, k7] = this.k as Float64Array[] as [
+			Float64Array,
+			Float64Array,
+			Float64Array,
+			Float64Array,
+			Float64Array,
+			Float64Array,
+			Float64Array,
+		];
 		const gone = Math.hypot((end[0] as number) - this.origin[0], (end[1] as number) - this.origin[1], (end[2] as number) - this.origin[2]);
 		const speed = Math.hypot(end[3] as number, end[4] as number, end[5] as number);
 		let worst = 0;
@@ -138,7 +149,15 @@ export class DragPath implements Path {
 	}
 
 	private keep(t: number, h: number, end: Float64Array): void {
-		const [k1, , k3, k4, k5, k6, k7] = this.k as Float64Array[] as [Float64Array, Float64Array, Float64Array, Float64Array, Float64Array, Float64Array, Float64Array];
+		const [k1, , k3, k4, k5, k6, k7] = this.k as Float64Array[] as [
+			Float64Array,
+			Float64Array,
+			Float64Array,
+			Float64Array,
+			Float64Array,
+			Float64Array,
+			Float64Array,
+		];
 		const y = this.y;
 		const dense = new Float64Array(31);
 		dense[30] = h;
@@ -192,7 +211,8 @@ export class DragPath implements Path {
 		const z = 1 - x;
 		for (let j = 0; j < 6; j++)
 			out[j] =
-				(d[j] as number) + x * ((d[6 + j] as number) + z * ((d[12 + j] as number) + x * ((d[18 + j] as number) + z * (d[24 + j] as number))));
+				(d[j] as number) +
+				x * ((d[6 + j] as number) + z * ((d[12 + j] as number) + x * ((d[18 + j] as number) + z * (d[24 + j] as number))));
 		return i;
 	}
 

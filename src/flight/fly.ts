@@ -5,7 +5,7 @@ import { type Contact, firstContact, type Stretch, stillness, TOUCHING } from ".
 import { DragPath } from "./drag-path.ts";
 import type { CoamingSurface, EdgePoint, Hatchway } from "./hatchway.ts";
 import { type Path, type State, StraightPath } from "./path.ts";
-import { ceilingSurface, CylinderFromWithin, CylinderFromWithout, floorSurface, Plane, type Surface, wallSurfaces } from "./surface.ts";
+import { CylinderFromWithin, CylinderFromWithout, ceilingSurface, floorSurface, Plane, type Surface, wallSurfaces } from "./surface.ts";
 import { pointTouched } from "./touched.ts";
 import { bodySurfaces, paneAt, type World } from "./world.ts";
 
@@ -21,7 +21,11 @@ export interface Release {
 }
 
 export type Struck =
-	| { readonly kind: "deck" | "ceiling" | "end-low" | "end-high" | "side-low" | "side-high" | "coaming" | "element"; readonly id: string; readonly deck: number }
+	| {
+			readonly kind: "deck" | "ceiling" | "end-low" | "end-high" | "side-low" | "side-high" | "coaming" | "element";
+			readonly id: string;
+			readonly deck: number;
+	  }
 	| { readonly kind: "outside" }
 	| { readonly kind: "none" };
 
@@ -106,7 +110,12 @@ abstract class Journey {
 					continue;
 				}
 				if (surface.kind === "coaming")
-					return this.finish({ kind: "coaming", id: surface.id, deck: place.way.hatch.deck }, t, surface, (surface as CoamingSurface).edge(this.state));
+					return this.finish(
+						{ kind: "coaming", id: surface.id, deck: place.way.hatch.deck },
+						t,
+						surface,
+						(surface as CoamingSurface).edge(this.state),
+					);
 				return this.strike(surface, surface instanceof WithinBay ? surface.deck : place.way.hatch.deck, t);
 			}
 			const way = this.openingAt(surface, place.deck);
@@ -306,7 +315,13 @@ class Dragged extends Journey {
 }
 
 /** First contact along a dragged path, advancing it as needed; polished on the full-order state. */
-export function firstDragContact(path: DragPath, surfaces: readonly Surface[], from: number, until: number, leaving: Set<Surface>): Contact | null {
+export function firstDragContact(
+	path: DragPath,
+	surfaces: readonly Surface[],
+	from: number,
+	until: number,
+	leaving: Set<Surface>,
+): Contact | null {
 	const s = new Float64Array(6);
 	let t = from;
 	while (t < until) {

@@ -179,7 +179,15 @@ class AxialCoaming implements CoamingSurface {
 }
 
 /** Nearest point to (x, y) on a deck's floor line (or the line `height` above it) between two angles. */
-function nearestOnLine(deck: Deck, height: number, x: number, y: number, angle: number, low: number, high: number): readonly [number, number] {
+function nearestOnLine(
+	deck: Deck,
+	height: number,
+	x: number,
+	y: number,
+	angle: number,
+	low: number,
+	high: number,
+): readonly [number, number] {
 	const n = deck.radius - height;
 	if (deck.floor === "curved") return [n * Math.cos(angle), n * Math.sin(angle)];
 	const c = Math.cos(deck.middle);

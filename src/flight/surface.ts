@@ -133,6 +133,7 @@ export function wallSurfaces(deck: Deck, half: number): Surface[] {
 		new Plane("end-high", deck.id, 0, 0, -1, deck.axialTo - half),
 	];
 	const behind = Math.PI - (deck.to - deck.from) / 2;
-	if (!deck.closed) walls.push(new HalfPlane("side-low", deck.id, deck.from, half, behind), new HalfPlane("side-high", deck.id, deck.to, half, behind));
+	if (!deck.closed)
+		walls.push(new HalfPlane("side-low", deck.id, deck.from, half, behind), new HalfPlane("side-high", deck.id, deck.to, half, behind));
 	return walls;
 }

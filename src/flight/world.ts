@@ -32,7 +32,12 @@ export function prepareWorld(habitat: Habitat): World {
 				keptHalf = half;
 				kept = [];
 			}
-			kept[deck.index] ??= [floorSurface(deck, half), ceilingSurface(deck, half), ...wallSurfaces(deck, half), ...bodySurfaces(bodies, half)];
+			kept[deck.index] ??= [
+				floorSurface(deck, half),
+				ceilingSurface(deck, half),
+				...wallSurfaces(deck, half),
+				...bodySurfaces(bodies, half),
+			];
 			return kept[deck.index]!;
 		},
 	};
@@ -59,9 +64,7 @@ function insidePane(deck: Deck, pane: WindowOpening, point: RingVec): boolean {
 	const angle = angleNear(Math.atan2(point[1], point[0]), pane.angle);
 	const [height, axial] = [heightAbove(deck, point), point[2] - pane.axial];
 	const prograde =
-		deck.floor === "curved"
-			? (deck.radius - pane.height) * (angle - pane.angle)
-			: tangentOf(deck, point) - floorAlong(deck, pane.angle);
+		deck.floor === "curved" ? (deck.radius - pane.height) * (angle - pane.angle) : tangentOf(deck, point) - floorAlong(deck, pane.angle);
 	/** On a flat deck's side, which leans outward, up is longer than height. */
 	const lean = deck.floor === "curved" ? 1 : Math.cos(pane.angle - deck.middle);
 	const [u, w] = {

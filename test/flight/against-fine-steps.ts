@@ -12,8 +12,8 @@ interface Agreement {
 	readonly clear: number | null;
 }
 
-/** s; longer than any flight of `randomBay` that strikes at all. */
-const LONGEST = 60;
+/** s; as long as a flight is followed at the rates of `randomBay`. */
+const LONGEST = 600;
 
 /** One random bay and toss by both; null where the object starts inside a solid element. */
 function agreement(seed: number): Agreement | null {

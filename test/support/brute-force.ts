@@ -298,7 +298,7 @@ export function fineSteps(
 		}
 		before = t;
 		beforeClear = near ?? beforeClear;
-		t += Math.min(0.02, Math.max(1e-5, (0.4 * beforeClear.clear) / Math.max(speed * 1.2, 1e-3)));
+		t += Math.min(0.2, Math.max(1e-5, (0.4 * beforeClear.clear) / Math.max(speed * 1.2, 1e-3)));
 	}
 	return { struck: "none", time: until, passed, place: null };
 }
