@@ -27,14 +27,14 @@ const tell = (): void => {
 
 const copy = (from: Look): Look => ({ ...from, target: new Float64Array(from.target) });
 
-/** The look of a station; another station starts from its own, the same keeps what was turned. */
-export function lookFor(station: string, fresh: () => Look): Look {
+/** Takes the look that a station starts from; another station begins with it, the same keeps what was turned. */
+export function takeStation(station: string, fresh: Look): void {
+	start = fresh;
 	if (look === null || kept !== station) {
-		start = fresh();
-		look = copy(start);
+		look = copy(fresh);
 		kept = station;
 	}
-	return look;
+	tell();
 }
 
 /** Back to the station's own look. */
@@ -59,7 +59,7 @@ export function turn(view: View, right: number, up: number): void {
 	if (!look) return;
 	if (view === "eyepoint") {
 		look.yaw += right;
-		look.pitch = clamp(look.pitch + up, -Math.PI, Math.PI);
+		look.pitch = clamp(look.pitch + up, -STEEPEST, STEEPEST);
 	} else {
 		look.azimuth -= right;
 		look.elevation = clamp(look.elevation - up, -STEEPEST, STEEPEST);

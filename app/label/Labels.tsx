@@ -1,9 +1,9 @@
 import { useEffect, useLayoutEffect, useMemo, useRef, useState } from "react";
 import type { DropPicture } from "../../src/shape/drop-picture.ts";
-import { usePrinter } from "../panel/print.ts";
 import type { AssessedCase, Finding } from "../store/core.ts";
 import { useDocument } from "../store/document.ts";
 import { weightiest } from "../store/findings.ts";
+import { usePrinter } from "../store/print.ts";
 import { useSession } from "../store/session.ts";
 import { dropLabels } from "./labels.ts";
 import { type Label, LabelPlacer } from "./place.ts";
@@ -38,6 +38,9 @@ export function Labels({
 				rank: i,
 				hang: text.hang ?? "free",
 				tries: text.tries,
+				live: text.live ?? null,
+				said: text.text,
+				bar: text.bar === undefined ? null : { element: element.firstElementChild as HTMLElement, step: text.bar, width: -1 },
 				width: element.offsetWidth,
 				height: element.offsetHeight,
 				taken: -1,
@@ -67,7 +70,8 @@ export function Labels({
 					</button>
 				) : (
 					<span key={text.anchor} className={`label ${text.look} ${text.letter ? `force-${text.letter}` : ""}`} aria-hidden="true">
-						{text.bar === undefined ? text.text : <ScaleBar picture={picture} metres={text.bar} print={print} />}
+						{text.bar !== undefined && <i className="bar" />}
+						{text.text}
 					</span>
 				),
 			)}
@@ -86,34 +90,20 @@ function useFontLoads(): number {
 	return loads;
 }
 
-/** What the weightiest finding outside its limit says of the landing, or null. */
+/** What the findings say of the landing, in a few words; unverified limits and what is not assessed are never passed over. */
 function verdictOf(c: AssessedCase, findings: readonly Finding[]): string | null {
-	const own = findings.filter((f) => f.subject === c.id && f.crew === c.crew && f.phase === c.phase && f.basis !== "unverified");
-	const worst = weightiest(own);
-	if (!worst) return null;
-	return worst.result === "outside" ? (OUTSIDE[worst.quantity] ?? "outside its limit") : "within its limits";
+	const own = findings.filter((f) => f.subject === c.id && f.crew === c.crew && f.phase === c.phase);
+	const outside = own.filter((f) => f.result === "outside");
+	const worst = weightiest(outside.filter((f) => f.basis !== "unverified"));
+	if (worst) return OUTSIDE[worst.quantity] ?? "outside its limit";
+	if (outside.length > 0) return "outside an unverified limit";
+	const open = own.filter((f) => f.result === "not-assessed").length;
+	if (own.length === open) return open > 0 ? "not assessed" : null;
+	const unverified = own.some((f) => f.result === "within" && f.basis === "unverified");
+	return `within${open > 0 ? `, ${open} not assessed` : ""}${unverified ? ", a limit unverified" : ""}`;
 }
 const OUTSIDE: Readonly<Record<string, string>> = {
 	walkway_landings: "outside: on the walkway",
 	hatches_passed: "outside: through a hatch",
 	coamings_struck: "outside: strikes a coaming",
 };
-
-function ScaleBar({
-	picture,
-	metres,
-	print,
-}: {
-	readonly picture: DropPicture;
-	readonly metres: number;
-	readonly print: (value: number, unit: string) => string;
-}) {
-	const greatest = picture.stage.greatest.centrifugal;
-	const step = greatest > 0 ? 10 ** Math.floor(Math.log10(greatest / 2)) * metres : metres;
-	return (
-		<>
-			<i className="bar" style={{ width: greatest > 0 ? (74 * step) / greatest : 0 }} />
-			{print(step, "m/s²")}
-		</>
-	);
-}

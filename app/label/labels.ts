@@ -1,4 +1,5 @@
 import { type Drop, GAP } from "../../src/activity/drop.ts";
+import { ARROWS, type ArrowLetter } from "../../src/shape/arrow.ts";
 import type { AnchorName, DropPicture } from "../../src/shape/drop-picture.ts";
 
 export interface LabelText {
@@ -6,15 +7,17 @@ export interface LabelText {
 	readonly text: string;
 	/** How it looks: style/overlay classes. */
 	readonly look: "answer" | "chip" | "axis" | "note" | "instrument";
-	readonly letter?: "C" | "K" | "E";
+	readonly letter?: ArrowLetter;
 	/** Summary key whose derivation it opens. */
 	readonly opens?: string;
 	readonly hang?: "centred" | "outward" | "tip";
 	/** A second line in words: what the finding says of it. */
 	readonly verdict?: string;
 	readonly tries: readonly (readonly [number, number])[];
-	/** A scale bar after the text: a length in m/s². */
+	/** A scale bar before the text, in m/s². */
 	readonly bar?: number;
+	/** A text that follows the picture: written where it differs from the one that stands. */
+	readonly live?: (picture: DropPicture) => string;
 }
 
 const ROUND = [
@@ -57,11 +60,15 @@ export function gapWords(gap: NonNullable<Drop["gap"]>, print: Print): string {
 export function dropLabels(picture: DropPicture, print: Print, verdict: string | null, external: boolean): readonly LabelText[] {
 	const { drop } = picture.stage;
 	const { gap } = drop;
-	const ten = picture.minorFactor === 10 ? " ×10" : "";
-	const force = (letter: "C" | "K" | "E", text: string): LabelText => ({
+	const { centrifugal } = picture.stage.greatest;
+	const step = centrifugal > 0 ? 10 ** Math.floor(Math.log10(centrifugal / 2)) : 1;
+	const factor = picture.minorFactor[external ? "external" : "eyepoint"];
+	const chip = (letter: ArrowLetter): string =>
+		`${letter}${external ? ` ${ARROWS[letter].name}` : ""}${factor === 10 && letter !== "C" && letter !== "G" ? " ×10" : ""}`;
+	const force = (letter: ArrowLetter): LabelText => ({
 		anchor: letter,
 		letter,
-		text,
+		text: chip(letter),
 		look: "chip",
 		tries: ROUND,
 		...(external ? {} : { hang: "tip" as const }),
@@ -79,22 +86,47 @@ export function dropLabels(picture: DropPicture, print: Print, verdict: string |
 					} as const,
 				]
 			: []),
-		force("K", `K${external ? " Coriolis" : ""}${ten}`),
-		force("C", external ? "C centrifugal" : "C"),
-		force("E", `E${external ? " Euler" : ""}${ten}`),
-		{ anchor: "ghost", text: "without turning", look: "note", tries: ROUND },
+		...(["K", "C", "E", "A", "G"] as const).map(force),
+		{ anchor: "ghost", text: "if the ring did not turn", look: "note", tries: ROUND },
 		{ anchor: "up", text: "up", look: "axis", hang: "outward", tries: [] },
 		{ anchor: "prograde", text: "with spin", look: "axis", hang: "outward", tries: [] },
 		{ anchor: "axial", text: "axial", look: "axis", hang: "outward", tries: [] },
 		{ anchor: "rose", text: "on the object", look: "instrument", hang: "centred", tries: [] },
-		{ anchor: "rose-bar", text: "", look: "instrument", hang: "centred", tries: [], bar: 1 },
-		{ anchor: "plumb", text: plumbWords(picture, print), look: "instrument", hang: "centred", tries: [] },
+		{ anchor: "rose-words", text: roseWords(picture), look: "instrument", hang: "centred", tries: [] },
+		{
+			anchor: "rose-bar",
+			text: print(step, "m/s²") + (factor === 10 ? `, ×10: ${print(step / 10, "m/s²")}` : ""),
+			look: external ? "note" : "instrument",
+			hang: "centred",
+			tries: [],
+			bar: step,
+		},
+		{
+			anchor: "plumb",
+			text: plumbWords(picture, print),
+			look: "instrument",
+			hang: "centred",
+			tries: [],
+			live: (p) => plumbWords(p, print),
+		},
 	];
 }
 
+const SHORT: Readonly<Record<ArrowLetter, string>> = { C: "centrifugal", K: "Coriolis", E: "Euler", A: "−own accel.", G: "sum" };
+
+/** The letters of the rose in words. */
+function roseWords({ stage }: DropPicture): string {
+	const shown: ArrowLetter[] = ["C", "K"];
+	if (stage.greatest.euler > 0) shown.push("E");
+	if (stage.drop.drag > 0) shown.push("A", "G");
+	const words = shown.map((letter) => `${letter} ${SHORT[letter]}`);
+	return [words.slice(0, 2).join("   "), words.slice(2).join("   ")].filter((line) => line !== "").join("\n");
+}
+
 function plumbWords(picture: DropPicture, print: Print): string {
-	const [x, y, z] = picture.stage.plumb as unknown as [number, number, number];
-	if (Math.hypot(x, y, z) === 0) return "no weight, no vertical";
+	const { plumb } = picture.stage;
+	const y = plumb[1] as number;
+	if (y === 0 && plumb[0] === 0 && plumb[2] === 0) return "no weight, no vertical";
 	const tilt = (Math.acos(Math.min(1, Math.max(-1, -y))) * 180) / Math.PI;
 	return `your vertical\n${tilt < 0.05 ? "true to the deck" : `${print(tilt, "°", 2)} off the deck’s`}`;
 }

@@ -13,6 +13,11 @@ export interface Label {
 	readonly tries: readonly (readonly [number, number])[];
 	width: number;
 	height: number;
+	/** A text that follows the picture, and the one that stands. */
+	readonly live: ((picture: DropPicture) => string) | null;
+	said: string;
+	/** A scale bar of the arrows: its length in m/s², and the width that stands, px. */
+	readonly bar: { readonly element: HTMLElement; readonly step: number; width: number } | null;
 	/** The try that was taken last: kept while it still fits. */
 	taken: number;
 }
@@ -77,6 +82,7 @@ export class LabelPlacer {
 	}
 
 	private put(label: Label, picture: DropPicture, width: number, height: number): void {
+		follow(label, picture);
 		const anchor = picture.anchors[label.anchor];
 		const { element } = label;
 		const before = anchor.visible && this.at(picture, anchor.point, width, height);
@@ -195,5 +201,25 @@ export class LabelPlacer {
 
 	private takeAround(x: number, y: number, r: number): void {
 		this.take(x - r, y - r, x + r, y + r);
+	}
+}
+
+/** Brings a label's own text and scale bar up to the picture. */
+function follow(label: Label, picture: DropPicture): void {
+	const { live, bar } = label;
+	if (live) {
+		const text = live(picture);
+		if (text !== label.said) {
+			label.said = text;
+			label.element.textContent = text;
+		}
+	}
+	if (bar) {
+		const width = Math.round(picture.rosePixels * bar.step);
+		if (width !== bar.width) {
+			bar.width = width;
+			bar.element.style.width = `${width}px`;
+			label.width = label.element.offsetWidth;
+		}
 	}
 }

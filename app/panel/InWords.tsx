@@ -7,7 +7,7 @@ import { dropTrace } from "../store/motion.ts";
 import { useSelectedCase } from "../store/navigate.ts";
 import { useSession } from "../store/session.ts";
 import { onTime } from "../store/transient.ts";
-import { type Printer, usePrinter } from "./print.ts";
+import { type Printer, usePrinter } from "../store/print.ts";
 import { findingWords, headlineWords, inWords, nameOf, withOrAgainst } from "./words.ts";
 
 /** The picture's facts as text, for everyone; the sentence about this instant follows when the clock has come to rest. */

@@ -6,7 +6,7 @@ import { useSelectedCase, worstCase } from "../store/navigate.ts";
 import { useSession } from "../store/session.ts";
 import { DerivationPanel } from "./DerivationPanel.tsx";
 import { Numbers } from "./Numbers.tsx";
-import { type Printer, usePrinter } from "./print.ts";
+import { type Printer, usePrinter } from "../store/print.ts";
 import { Traces } from "./Traces.tsx";
 import { consequence, headline, limitWords, nameOf, quantityWords, RESULT_WORDS } from "./words.ts";
 

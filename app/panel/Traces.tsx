@@ -4,7 +4,7 @@ import { printNumber, withUnit } from "../../src/quantity/print-quantity.ts";
 import type { AssessedCase } from "../store/core.ts";
 import { dropTrace } from "../store/motion.ts";
 import { onTime, setTime, transient } from "../store/transient.ts";
-import type { Printer } from "./print.ts";
+import type { Printer } from "../store/print.ts";
 import { useWidth } from "./useWidth.ts";
 
 const INSET = { top: 8, right: 10, bottom: 4, left: 46 };

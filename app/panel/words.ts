@@ -1,11 +1,11 @@
-import { GAP } from "../../src/activity/drop.ts";
+import { END, GAP } from "../../src/activity/drop.ts";
 import { apparentParts } from "../../src/frame/apparent.ts";
 import { deckTriad } from "../../src/layout/habitat.ts";
 import { degFromRad, gFromMps2, rpmFromRadps } from "../../src/quantity/convert.ts";
 import { dot, length, ring } from "../../src/vector/vec3.ts";
 import type { AssessedCase, Finding, LayoutFile } from "../store/core.ts";
 import { eventsOf } from "../store/motion.ts";
-import type { Printer } from "./print.ts";
+import type { Printer } from "../store/print.ts";
 
 /** The facts of a case as plain sentences, from the person's point of view: for the headline, and for whoever cannot see the picture. */
 
@@ -78,12 +78,11 @@ export function headline(c: AssessedCase, print: Printer): Headline | null {
 			lead: "Leaves the bays after",
 			value: end,
 			unit: "s",
-			key: "struck",
+			key: END,
 			tail: `through ${c.motion.flight.passed.join(", ")}`,
 			also: "",
 		};
-	if (struck.kind === "none")
-		return { lead: "Has struck nothing after", value: end, unit: "s", key: "struck", tail: "of flight", also: "" };
+	if (struck.kind === "none") return { lead: "Has struck nothing after", value: end, unit: "s", key: END, tail: "of flight", also: "" };
 	const prograde = number(c, "landing_prograde_m");
 	const lead = struck.kind === "deck" ? "Lands" : `Strikes ${struckWords(c)}`;
 	const seen = fromFeetWords(c, print);

@@ -1,5 +1,4 @@
-import { useCallback, useEffect, useMemo, useRef, useState } from "react";
-import type { Stars } from "../../src/shape/drawable.ts";
+import { useCallback, useEffect, useLayoutEffect, useMemo, useRef, useState } from "react";
 import { DropFigure } from "../../src/shape/drop-figure.ts";
 import { DropPicture } from "../../src/shape/drop-picture.ts";
 import { DropStage } from "../../src/shape/drop-stage.ts";
@@ -7,11 +6,12 @@ import { createFigure, type Figure } from "../../src/shape/figure.ts";
 import { StillShapes } from "../../src/shape/still.ts";
 import { FieldOfView } from "../control/FieldOfView.tsx";
 import { listenKeys } from "../control/keys.ts";
-import { currentLook, lookFor, onLook } from "../control/look.ts";
+import { currentLook, onLook, takeStation } from "../control/look.ts";
 import { listenPointer } from "../control/pointer.ts";
 import { Labels } from "../label/Labels.tsx";
 import type { LabelPlacer } from "../label/place.ts";
 import type { AssessedCase } from "../store/core.ts";
+import { useDocument } from "../store/document.ts";
 import { useSelectedCase } from "../store/navigate.ts";
 import { useSession } from "../store/session.ts";
 import { useStars } from "../store/stars.ts";
@@ -21,21 +21,20 @@ import { offerProbe } from "./probe-stage.ts";
 import { usePainter } from "./usePainter.ts";
 
 /** The picture of a case; null where its kind is not built. */
-function pictureOf(c: AssessedCase | null, stars: Stars, shapes: StillShapes, figure: Figure): DropPicture | null {
+function pictureOf(c: AssessedCase | null, shapes: StillShapes, figure: Figure): DropPicture | null {
 	if (!c?.motion) return null;
 	const { context, motion } = c;
-	return new DropPicture(new DropStage(context.habitat, context.spin, motion, stars, shapes), new DropFigure(motion, figure));
+	return new DropPicture(new DropStage(context.habitat, context.spin, motion, shapes), new DropFigure(motion, figure));
 }
 
 /** The stage: canvas, controls and labels of the selected case. */
 export function Stage() {
 	const shown = useSelectedCase();
 	const view = useSession((s) => s.view);
-	const stars = useStars((s) => s.stars);
 	const [shapes] = useState(() => new StillShapes());
 	const stature = shown?.context.person.stature ?? 1.75;
 	const figure = useMemo(() => createFigure(stature), [stature]);
-	const picture = useMemo(() => pictureOf(shown, stars, shapes, figure), [shown, stars, shapes, figure]);
+	const picture = useMemo(() => pictureOf(shown, shapes, figure), [shown, shapes, figure]);
 	const host = useRef<HTMLDivElement>(null);
 	const placer = useRef<LabelPlacer | null>(null);
 	const live = useRef(picture);
@@ -44,6 +43,7 @@ export function Stage() {
 		() =>
 			new Conductor({
 				picture: () => live.current,
+				stars: () => useStars.getState().stars,
 				look: currentLook,
 				view: () => useSession.getState().view,
 				time: () => transient.time,
@@ -51,8 +51,11 @@ export function Stage() {
 				drawn: (p, width, height) => placer.current?.place(p, width, height),
 			}),
 	);
-	const station = shown ? `${shown.id} ${shown.crew} ${shown.phase}` : "";
-	if (picture) lookFor(station, () => picture.defaultLook());
+	const document = useDocument((s) => s.id);
+	const station = shown ? JSON.stringify([document, shown.id, shown.crew, shown.phase]) : "";
+	useLayoutEffect(() => {
+		if (picture) takeStation(station, picture.defaultLook());
+	}, [picture, station]);
 
 	useEffect(() => {
 		const element = host.current;
@@ -64,6 +67,7 @@ export function Stage() {
 			onLook(conductor.wake),
 			onTime(conductor.wake),
 			useSession.subscribe(conductor.wake),
+			useStars.subscribe(conductor.wake),
 		];
 		const sizes = new ResizeObserver(() => conductor.resize(element.clientWidth, element.clientHeight));
 		sizes.observe(element);

@@ -1,9 +1,11 @@
+import type { Stars } from "../../src/shape/drawable.ts";
 import type { DropPicture, Look, View } from "../../src/shape/drop-picture.ts";
 import type { Painter } from "./painter.ts";
 
 /** What the conductor plays from; all read anew each frame. */
 export interface Score {
 	picture(): DropPicture | null;
+	stars(): Stars;
 	look(): Look | null;
 	view(): View;
 	time(): number;
@@ -43,7 +45,7 @@ export class Conductor {
 	use(painter: Painter | null): void {
 		this.painter = painter;
 		const picture = this.score.picture();
-		if (painter && picture) painter.show(picture);
+		if (painter && picture) painter.show(picture, this.score.stars());
 		this.wake();
 	}
 
@@ -71,9 +73,9 @@ export class Conductor {
 		const dt = this.last === 0 ? 0 : (now - this.last) / 1000;
 		const playing = this.score.advance(dt);
 		this.last = playing ? now : 0;
-		const painted = this.step(SCALES[this.level] as number, false);
+		const painted = this.step((SCALES[this.level] as number) * this.fullRatio(), false);
 		if (playing) this.pace();
-		if (playing || !painted) this.wake();
+		if (playing || (!painted && !this.painter?.lost)) this.wake();
 		if (!playing) this.resting = window.setTimeout(this.rest, REST);
 	};
 
@@ -84,8 +86,13 @@ export class Conductor {
 
 	private rest = (): void => {
 		this.resting = 0;
-		if (this.scheduled === 0 && !this.step(this.stillRatio(), true)) this.wake();
+		if (this.scheduled === 0 && !this.step(this.stillRatio(), true) && !this.painter?.lost) this.wake();
 	};
+
+	/** Device px a CSS px at full resolution: a processor draws one, a graphics processor what the screen has. */
+	private fullRatio(): number {
+		return this.painter?.kind === "raster" ? 1 : Math.min(2, window.devicePixelRatio);
+	}
 
 	private stillRatio(): number {
 		return this.painter?.kind === "raster" ? 1 : Math.max(STILL_RATIO, window.devicePixelRatio);
@@ -98,7 +105,7 @@ export class Conductor {
 		const { painter, width, height } = this;
 		if (!picture || !look || !painter || width < 1 || height < 1) return true;
 		const begin = performance.now();
-		painter.show(picture);
+		painter.show(picture, this.score.stars());
 		picture.update(this.score.time(), this.score.view(), look, width, height);
 		this.score.drawn(picture, width, height);
 		const middle = performance.now();

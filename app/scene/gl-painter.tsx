@@ -1,5 +1,6 @@
 import { createRoot, extend, type ReconcilerRoot, type RootState } from "@react-three/fiber";
 import { Group, PerspectiveCamera } from "three";
+import type { Stars } from "../../src/shape/drawable.ts";
 import type { DropPicture } from "../../src/shape/drop-picture.ts";
 import { Lights } from "./Lights.tsx";
 import { Moving } from "./Moving.tsx";
@@ -15,31 +16,41 @@ export async function createGlPainter(canvas: HTMLCanvasElement): Promise<Painte
 	const camera = new PerspectiveCamera();
 	camera.matrixAutoUpdate = false;
 	const root: ReconcilerRoot<HTMLCanvasElement> = createRoot(canvas);
-	await root.configure({
-		frameloop: "never",
-		dpr: 1,
-		flat: true,
-		camera: camera as never,
-		gl: { canvas, antialias: false, alpha: false, stencil: false, powerPreference: "high-performance" },
-		size: { width: canvas.clientWidth || 1, height: canvas.clientHeight || 1, top: 0, left: 0 },
-	});
+	try {
+		await root.configure({
+			frameloop: "never",
+			dpr: 1,
+			flat: true,
+			camera: camera as never,
+			gl: { canvas, antialias: false, alpha: false, stencil: false, powerPreference: "high-performance" },
+			size: { width: canvas.clientWidth || 1, height: canvas.clientHeight || 1, top: 0, left: 0 },
+		});
+	} catch (error) {
+		root.unmount();
+		throw error;
+	}
 	let store: { getState(): RootState } | null = null;
 	let ready = false;
 	let shown: DropPicture | null = null;
+	let under: Stars | null = null;
 	const onReady = (): void => {
 		ready = true;
 	};
 	return {
 		kind: "webgl",
-		show(picture) {
-			if (picture === shown) return;
+		get lost() {
+			return store?.getState().gl.getContext().isContextLost() ?? false;
+		},
+		show(picture, stars) {
+			if (picture === shown && stars === under) return;
+			if (picture !== shown) ready = false;
 			shown = picture;
-			ready = false;
+			under = stars;
 			store = root.render(
 				<>
 					<Lights />
 					<Viewpoint picture={picture} camera={camera} />
-					<Sky picture={picture} />
+					<Sky picture={picture} stars={stars} />
 					<Still picture={picture} />
 					<Moving parts={picture.figure.parts} from={2000} />
 					<Moving parts={picture.others} from={3000} onReady={onReady} />

@@ -14,10 +14,12 @@ export function createRasterPainter(canvas: HTMLCanvasElement): Painter {
 	let scene: (RasterScene & { readonly still: Drawable[]; readonly parts: Part[] }) | null = null;
 	return {
 		kind: "raster",
-		show(next) {
+		lost: false,
+		show(next, stars) {
+			if (next === picture && scene?.still[0] === stars) return;
 			picture = next;
 			scene = {
-				still: [next.stage.stars],
+				still: [stars],
 				parts: [],
 				skyRotation: next.stage.skyRotation,
 				pixelRatio: 1,

@@ -4,6 +4,8 @@ import type { Painter } from "./painter.ts";
 import { createRasterPainter } from "./raster-painter.ts";
 
 type Kind = "webgl" | "raster";
+/** A canvas that stays lost this long is drawn by the raster instead, ms. */
+const GIVE_UP = 4000;
 
 /** `?picture=webgl` or `?picture=raster` in the address overrules the choice. */
 function asked(): Kind | null {
@@ -62,11 +64,17 @@ export function usePainter(conductor: Conductor): {
 			}
 		};
 		void start();
+		let giveUp = 0;
 		const lose = (e: Event): void => {
 			e.preventDefault();
 			setLost(true);
+			giveUp = window.setTimeout(() => {
+				setLost(false);
+				setKind("raster");
+			}, GIVE_UP);
 		};
 		const restore = (): void => {
+			clearTimeout(giveUp);
 			setLost(false);
 			conductor.wake();
 		};
@@ -74,6 +82,7 @@ export function usePainter(conductor: Conductor): {
 		element.addEventListener("webglcontextrestored", restore);
 		return () => {
 			live = false;
+			clearTimeout(giveUp);
 			element.removeEventListener("webglcontextlost", lose);
 			element.removeEventListener("webglcontextrestored", restore);
 			conductor.use(null);

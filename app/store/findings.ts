@@ -1,4 +1,7 @@
+import { byMargin } from "../../src/criteria/order.ts";
 import type { Finding } from "./core.ts";
+
+export { byMargin };
 
 export const findingKey = (f: Finding): string => [f.criterion, f.subject, f.crew ?? "", f.phase].join("|");
 
@@ -6,9 +9,6 @@ const FORCE = { shall: 0, should: 1, information: 2 } as const;
 const RESULT = { outside: 0, within: 1, "not-assessed": 2 } as const;
 
 const margin = (f: Finding): number => f.margin ?? Number.POSITIVE_INFINITY;
-
-/** Outside first, then least margin; not assessed last. */
-export const byMargin = (a: Finding, b: Finding): number => RESULT[a.result] - RESULT[b.result] || compare(margin(a), margin(b));
 
 /** What matters most first: outside before the rest, then shall, should, information, then least margin. */
 const byWeight = (a: Finding, b: Finding): number =>

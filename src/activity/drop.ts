@@ -51,7 +51,7 @@ export function computeDrop(context: Context, file: DropFile): Drop {
 	const stance = file.feet
 		? givenStance(deck, angleNear(radFromDeg(file.feet.angle_deg), deck.middle), file.feet.axial_m, radFromDeg(file.feet.facing_deg))
 		: stanceAtHand(deck, position, context.person.stature, radFromDeg(file.release?.heading_deg ?? 0));
-	const ghost = ghostOf(deck, spin.rate(0), position, velocity, diameter, drag);
+	const ghost = ghostOf(world, deck, spin.rate(0), position, velocity, diameter, drag);
 	return {
 		kind: "drop",
 		deck,
@@ -102,7 +102,7 @@ export interface MotionEvent {
 	readonly name: string;
 }
 
-const STRIKES: Readonly<Record<Flight["struck"]["kind"], string>> = {
+const STRIKES: Readonly<Record<Exclude<Flight["struck"]["kind"], "element">, string>> = {
 	deck: "lands",
 	ceiling: "strikes the ceiling",
 	"end-low": "strikes a bulkhead",
@@ -110,7 +110,6 @@ const STRIKES: Readonly<Record<Flight["struck"]["kind"], string>> = {
 	"side-low": "strikes a bulkhead",
 	"side-high": "strikes a bulkhead",
 	coaming: "strikes the coaming",
-	element: "is struck",
 	outside: "leaves the bay",
 	none: "is no longer followed",
 };
@@ -126,9 +125,21 @@ export function eventsOfDrop({ flight }: Drop): readonly MotionEvent[] {
 
 /** The derivation of the picture's own comparison stands beside those of the summary under this key. */
 export const GAP = "gap";
+/** Likewise that of the time at which a flight that struck nothing ends. */
+export const END = "end_s";
 
+const LONGEST = "10 turns at the rate of the release, or 600 s where that is longer";
 const NOTHING_STRUCK = "nothing was struck";
 const LEFT = "it left through a hatch into no deck's volume";
+const NO_AXIAL = "an end bulkhead has no axial direction of its own";
+
+/** Why a landing has no prograde offset. */
+function noPrograde(context: Context, drop: Drop, from: "release" | "feet"): string {
+	const { kind } = drop.flight.struck;
+	if (kind === "side-low" || kind === "side-high") return "a side bulkhead has no prograde direction of its own";
+	const struck = `deck "${deckOfStrike(context, drop).id}"`;
+	return `the line straight down from the ${from} does not meet ${kind === "ceiling" ? `the ceiling of ${struck}` : struck}`;
+}
 
 export function summariseDrop(context: Context, file: DropFile, drop: Drop): CaseSummary {
 	const { spin, habitat } = context;
@@ -154,11 +165,12 @@ export function summariseDrop(context: Context, file: DropFile, drop: Drop): Cas
 
 	writer.word("struck", struckName(flight, habitat), struck);
 	writer.number("flight_time_s", found ? flight.end : null, none, how);
-	writer.number("landing_prograde_m", found?.prograde ?? null, found ? "a side bulkhead has no prograde direction of its own" : none, how);
+	writer.number("landing_prograde_m", found?.prograde ?? null, found ? noPrograde(context, drop, "release") : none, how);
+	if (!found) writer.beside(END, how);
 	writer.number(
 		"landing_axial_m",
 		found?.axial ?? null,
-		found ? "an end bulkhead has no axial direction of its own" : none,
+		found ? NO_AXIAL : none,
 		derive("landing-axial", [
 			put("z_touched", "axial place of the point touched", found?.point[2] ?? "none", "m"),
 			put("z_release", "axial place of the release", file.from.axial_m, "m"),
@@ -191,7 +203,7 @@ export function summariseDrop(context: Context, file: DropFile, drop: Drop): Cas
 		derive("equal-earth-drop", [speed, put("g₀", "standard gravity", STANDARD_GRAVITY, "m/s²")]),
 	);
 	writer.list("passed", flight.passed, struck);
-	if (drop.gap && found?.prograde != null)
+	if (drop.gap && found?.prograde != null && found.axial != null)
 		writer.beside(
 			GAP,
 			derive(
@@ -199,6 +211,8 @@ export function summariseDrop(context: Context, file: DropFile, drop: Drop): Cas
 				[
 					put("s", "offset of the landing from the point below the release", found.prograde, "m"),
 					put("s₀", "offset of the landing without turning", found.prograde - drop.gap.prograde, "m"),
+					put("s_z", "axial offset of the landing from the release", found.axial, "m"),
+					put("s_z₀", "axial offset of the landing without turning", found.axial - drop.gap.axial, "m"),
 					put("g", "uniform level, that of the floor", drop.ghost.field, "m/s²"),
 				],
 				[file.drag ? "The same air drag." : "No air drag in either."],
@@ -218,15 +232,26 @@ export function summariseDrop(context: Context, file: DropFile, drop: Drop): Cas
 					"m",
 				),
 			]);
-		const bulkhead = found && d.stance.given ? "that bulkhead has no such direction of its own" : missing;
-		to.number("landing_from_feet_prograde_m", d.fromFeet?.prograde ?? null, bulkhead, offset("prograde", found?.prograde ?? null));
-		to.number("landing_from_feet_axial_m", d.fromFeet?.axial ?? null, bulkhead, offset("axial", found?.axial ?? null));
+		const landed = found && d.stance.given;
+		to.number(
+			"landing_from_feet_prograde_m",
+			d.fromFeet?.prograde ?? null,
+			landed ? noPrograde(context, d, "feet") : missing,
+			offset("prograde", found?.prograde ?? null),
+		);
+		to.number("landing_from_feet_axial_m", d.fromFeet?.axial ?? null, landed ? NO_AXIAL : missing, offset("axial", found?.axial ?? null));
 	}
 
 	function flightDerivation(c: Context, f: DropFile, d: Drop, from: Cylindrical): Derivation {
 		const rate = put("Ω", "spin rate at the release", rpmFromRadps(spin.rate(0)), "rpm");
 		const v0 = put("v₀", "release speed relative to the ring", f.release?.speed_mps ?? 0, "m/s");
 		const r0 = put("r₀", "radius of the release", from.radius, "m");
+		const until =
+			flight.struck.kind === "none"
+				? [`Nothing is struck: it is followed for ${LONGEST}.`]
+				: flight.struck.kind === "outside"
+					? ["Nothing is struck: followed until it is wholly out of the hatch."]
+					: [];
 		if (f.drag) {
 			return derive(
 				"drag-flight",
@@ -239,7 +264,7 @@ export function summariseDrop(context: Context, file: DropFile, drop: Drop): Cas
 					put("A", "frontal area", (Math.PI * object.diameter ** 2) / 4, "m²"),
 					put("m", "mass of the object", object.mass, "kg"),
 				],
-				["The object is a sphere.", "The air turns rigidly with the ring and is equally dense everywhere."],
+				["The object is a sphere.", "The air turns rigidly with the ring and is equally dense everywhere.", ...until],
 			);
 		}
 		const atRest = d.velocity.every((v) => v === 0);
@@ -261,8 +286,8 @@ export function summariseDrop(context: Context, file: DropFile, drop: Drop): Cas
 		}
 		return derive(
 			"free-flight",
-			[r0, v0, rate, put("t", "time of the first contact", found ? flight.end : "none", "s")],
-			["The object is a sphere.", "Air drag is switched off for this activity."],
+			[r0, v0, rate, put("t", found ? "time of the first contact" : "time followed", flight.end, "s")],
+			["The object is a sphere.", "Air drag is switched off for this activity.", ...until],
 		);
 	}
 }

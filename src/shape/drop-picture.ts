@@ -1,4 +1,4 @@
-import { type Arrow, createArrow } from "./arrow.ts";
+import { type Arrow, type ArrowLetter, createArrow } from "./arrow.ts";
 import { facesFromBehind } from "./bay.ts";
 import { aim, type Camera, createCamera, project } from "./camera.ts";
 import type { Part } from "./drawable.ts";
@@ -39,10 +39,13 @@ export const ANCHORS = [
 	"C",
 	"K",
 	"E",
+	"A",
+	"G",
 	"prograde",
 	"up",
 	"axial",
 	"rose",
+	"rose-words",
 	"rose-bar",
 	"plumb",
 	"axes",
@@ -52,12 +55,16 @@ export type AnchorName = (typeof ANCHORS)[number];
 const AXIS_NAMES = ["prograde", "up", "axial"] as const;
 /** Of the instruments, CSS px. */
 const AXIS = { width: 144, height: 100, arm: 29, margin: 14, small: { width: 112, height: 84, arm: 22 } } as const;
-const ROSE = { width: 168, height: 178, arm: 62, margin: 14 } as const;
+const ROSE = { width: 168, height: 178, arm: 54, margin: 14 } as const;
+/** Of the scale bar beside the plumb in External. */
+const BAR = { beside: 92, above: 14 } as const;
 const PLUMB = { width: 104, height: 178, long: 84 } as const;
 /** A picture narrower or lower than this has no room for rose and plumb. */
 const ROOM = { width: 560, height: 420 } as const;
 /** Length of the largest C in External, m. */
 const ARROW = 0.46;
+/** Of the stage, px, at which scales are decided. */
+const ORDINARY_HEIGHT = 600;
 /** An arrow shorter than this (px) at its largest is drawn ten times as long, and says so. */
 const SHORTEST = 24;
 
@@ -73,13 +80,19 @@ export class DropPicture {
 	) as Record<AnchorName, Anchor>;
 	/** Which of the stage's still drawables are seen, by index: a bulkhead that stands between an outside camera and the bay is not. */
 	readonly seen: Uint8Array;
-	/** 1, or 10 where Coriolis and Euler are drawn ten times as long. */
-	minorFactor: 1 | 10 = 1;
+	/** 10 where Coriolis, Euler and the object's own acceleration are drawn ten times as long as the scale says, since they would be too short to see; else 1. */
+	readonly minorFactor: Readonly<Record<View, 1 | 10>>;
 	/** Rectangles that the instruments take up, CSS px: left, top, right, bottom; empty ones are where none is. */
 	readonly instruments: readonly Float64Array[] = [new Float64Array(4), new Float64Array(4), new Float64Array(4)];
 	/** Drawn length of 1 m/s² of C on the rose, px. */
 	rosePixels = 0;
-	private readonly arrows = { C: createArrow("C"), K: createArrow("K"), E: createArrow("E") } as const;
+	private readonly arrows = {
+		C: createArrow("C"),
+		K: createArrow("K"),
+		E: createArrow("E"),
+		A: createArrow("A"),
+		G: createArrow("G"),
+	} as const;
 	private readonly axisPanel = createPanel(AXIS.width, AXIS.height);
 	private readonly axes = createAxisCue();
 	private readonly rosePanel = createPanel(ROSE.width, ROSE.height);
@@ -87,6 +100,8 @@ export class DropPicture {
 	private readonly plumb = createPlumb();
 	/** Where the arrows start, stage, m. */
 	readonly arrowOrigin = new Float64Array(3);
+	/** The largest force that is drawn at the first scale, m/s². */
+	private readonly longest: number;
 	private readonly drawn = new Float64Array(3);
 	private readonly seenFrom = new Float64Array(3).fill(Number.NaN);
 	private onRose = false;
@@ -104,11 +119,27 @@ export class DropPicture {
 			...this.axisPanel.parts,
 			...this.arrows.C.parts,
 			...this.arrows.E.parts,
+			...this.arrows.A.parts,
 			...this.arrows.K.parts,
+			...this.arrows.G.parts,
 			...this.plumb.parts,
 			...this.axes.parts,
 		];
 		this.parts = [...figure.parts, ...this.others];
+		const { centrifugal, own } = stage.greatest;
+		this.longest = stage.drop.drag > 0 ? Math.max(centrifugal, own) : centrifugal;
+		this.minorFactor = this.minorFactors();
+	}
+
+	/** Decided once a view, at its own scale and a picture of ordinary size, so that it does not change while the person looks around. */
+	private minorFactors(): Readonly<Record<View, 1 | 10>> {
+		const { coriolis, euler, own } = this.stage.greatest;
+		const { longest } = this;
+		const look = this.defaultLook();
+		const external = (ARROW * ORDINARY_HEIGHT) / 2 / Math.tan(look.fovExternal / 2) / look.distance;
+		const share = longest > 0 ? Math.max(coriolis, euler, this.stage.drop.drag > 0 ? own : 0) / longest : 0;
+		const factor = (pixels: number): 1 | 10 => (share > 0 && share * pixels < SHORTEST ? 10 : 1);
+		return { eyepoint: factor(ROSE.arm), external: factor(external) };
 	}
 
 	/** The look of External as first shown: beside the person, prograde to the right, the whole flight in the picture. */
@@ -210,29 +241,31 @@ export class DropPicture {
 		let head: number;
 		let perMetre: number;
 		if (view === "eyepoint") {
-			hudPoint(camera, width, height, ROSE.margin + ROSE.width / 2, height - ROSE.margin - ROSE.height / 2 - 30, origin);
+			hudPoint(camera, width, height, ROSE.margin + ROSE.width / 2, height - ROSE.margin - ROSE.height / 2 - 14, origin);
 			const s = metresPerPixel(camera, height);
-			scale = greatest.centrifugal > 0 ? (ROSE.arm * s) / greatest.centrifugal : 0;
+			scale = this.longest > 0 ? (ROSE.arm * s) / this.longest : 0;
 			head = 15 * s;
 			perMetre = 1 / s;
 		} else {
 			origin.set(object);
 			project(camera, width, height, object[0] as number, object[1] as number, object[2] as number, this.pixel);
 			perMetre = height / 2 / Math.tan(camera.fovY / 2) / Math.max(0.2, this.pixel[2] as number);
-			scale = greatest.centrifugal > 0 ? ARROW / greatest.centrifugal : 0;
+			scale = this.longest > 0 ? ARROW / this.longest : 0;
 			head = 19 / perMetre;
 		}
 		this.rosePixels = scale * perMetre;
-		const minor = Math.max(greatest.coriolis, greatest.euler) * scale * perMetre;
-		this.minorFactor = minor > 0 && minor < SHORTEST ? 10 : 1;
+		const minor = scale * this.minorFactor[view];
 		const shown = view === "external" || room;
 		this.onRose = view === "eyepoint";
 		this.point("C", stage.forces.centrifugal, scale, head, shown);
-		this.point("K", stage.forces.coriolis, scale * this.minorFactor, head, shown);
-		this.point("E", stage.forces.euler, scale * this.minorFactor, head, shown && greatest.euler > 0);
+		const dragged = shown && stage.drop.drag > 0;
+		this.point("K", stage.forces.coriolis, minor, head, shown);
+		this.point("E", stage.forces.euler, minor, head, shown && greatest.euler > 0);
+		this.point("A", stage.forces.own, minor, head, dragged);
+		this.point("G", stage.forces.sum, scale, head, dragged);
 	}
 
-	private point(letter: "C" | "K" | "E", force: Float64Array, scale: number, head: number, shown: boolean): void {
+	private point(letter: ArrowLetter, force: Float64Array, scale: number, head: number, shown: boolean): void {
 		const arrow: Arrow = this.arrows[letter];
 		const anchor = this.anchors[letter];
 		const size = Math.hypot(force[0] as number, force[1] as number, force[2] as number);
@@ -283,8 +316,12 @@ export class DropPicture {
 		if (rose) this.rosePanel.set(camera, width, height, roseX, roseY);
 		anchors.rose.visible = rose;
 		hudPoint(camera, width, height, roseX, roseY - ROSE.height / 2 + 16, anchors.rose.point);
-		anchors["rose-bar"].visible = rose;
-		hudPoint(camera, width, height, roseX, roseY + ROSE.height / 2 - 16, anchors["rose-bar"].point);
+		anchors["rose-words"].visible = rose;
+		hudPoint(camera, width, height, roseX, roseY + ROSE.height / 2 - 42, anchors["rose-words"].point);
+		const bar = anchors["rose-bar"];
+		bar.visible = room;
+		if (rose) hudPoint(camera, width, height, roseX, roseY + ROSE.height / 2 - 16, bar.point);
+		else hudPoint(camera, width, height, ROSE.margin + PLUMB.width + BAR.beside, height - ROSE.margin - BAR.above, bar.point);
 		const weight = Math.hypot(stage.plumb[0] as number, stage.plumb[1] as number, stage.plumb[2] as number) > 0;
 		for (const p of this.plumbPanel.parts) p.visible = room;
 		this.plumb.setVisible(room && weight);

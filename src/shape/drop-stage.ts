@@ -4,7 +4,7 @@ import type { Spin } from "../frame/spin.ts";
 import type { Deck, Habitat } from "../layout/habitat.ts";
 import { writeRingFromIcrs } from "../sky/attitude.ts";
 import type { RingVec } from "../vector/vec3.ts";
-import type { Drawable, Part, Stars } from "./drawable.ts";
+import type { Drawable, Part } from "./drawable.ts";
 import { objectShape } from "./elements-object.ts";
 import { floorPoint, gapLine, ghostMark, landingMark } from "./landing-mark.ts";
 import { part, placeAt } from "./part.ts";
@@ -17,6 +17,9 @@ export interface ObjectForces {
 	readonly centrifugal: Float64Array;
 	readonly coriolis: Float64Array;
 	readonly euler: Float64Array;
+	/** Minus the object's own acceleration, and the sum; only with drag, since without it the sum is zero. */
+	readonly own: Float64Array;
+	readonly sum: Float64Array;
 }
 
 /**
@@ -30,9 +33,15 @@ export class DropStage {
 	readonly skyRotation = new Float64Array(9);
 	/** Of the flying sphere's centre, m. */
 	readonly object = new Float64Array(3);
-	readonly forces: ObjectForces = { centrifugal: new Float64Array(3), coriolis: new Float64Array(3), euler: new Float64Array(3) };
+	readonly forces: ObjectForces = {
+		centrifugal: new Float64Array(3),
+		coriolis: new Float64Array(3),
+		euler: new Float64Array(3),
+		own: new Float64Array(3),
+		sum: new Float64Array(3),
+	};
 	/** Largest size of each over the flight, m/s². */
-	readonly greatest = { centrifugal: 0, coriolis: 0, euler: 0 };
+	readonly greatest = { centrifugal: 0, coriolis: 0, euler: 0, own: 0 };
 	/** Where it lands and where it would have without turning, stage, m; null where it does not. */
 	readonly landing: Float64Array | null;
 	readonly ghostLanding: Float64Array | null;
@@ -56,7 +65,6 @@ export class DropStage {
 		readonly habitat: Habitat,
 		private readonly spin: Spin,
 		readonly drop: Drop,
-		readonly stars: Stars,
 		shapes: StillShapes,
 	) {
 		const { deck, stance } = drop;
@@ -125,6 +133,7 @@ export class DropStage {
 			this.greatest.centrifugal = Math.max(this.greatest.centrifugal, size(this.forces.centrifugal));
 			this.greatest.coriolis = Math.max(this.greatest.coriolis, size(this.forces.coriolis));
 			this.greatest.euler = Math.max(this.greatest.euler, size(this.forces.euler));
+			this.greatest.own = Math.max(this.greatest.own, size(this.forces.own));
 		}
 		if (this.ghostLanding) this.include(this.ghostLanding);
 	}
@@ -142,6 +151,7 @@ export class DropStage {
 		this.force(this.forces.centrifugal, 0);
 		this.force(this.forces.coriolis, 2);
 		this.force(this.forces.euler, 4);
+		if (drop.drag > 0) this.slow();
 		this.hasLanded = shown >= drop.flight.end - 1e-9;
 		this.showTrail(shown);
 		this.showGhost(this.hasLanded ? Number.MAX_VALUE : shown);
@@ -155,6 +165,18 @@ export class DropStage {
 
 	private force(out: Float64Array, from: number): void {
 		putDirection(this.frame, this.parts6[from] as number, this.parts6[from + 1] as number, 0, out);
+	}
+
+	/** With drag a = C + K + E − k |v| v, so that G = C + K + E + A is what the air does to it. */
+	private slow(): void {
+		const { forces, state, drop } = this;
+		const { sum, own, centrifugal, coriolis, euler } = forces;
+		const vx = state[3] as number;
+		const vy = state[4] as number;
+		const vz = state[5] as number;
+		const k = drop.drag * Math.hypot(vx, vy, vz);
+		putDirection(this.frame, k * vx, k * vy, k * vz, sum);
+		for (let i = 0; i < 3; i++) own[i] = (sum[i] as number) - (centrifugal[i] as number) - (coriolis[i] as number) - (euler[i] as number);
 	}
 
 	/** Apparent gravity of someone standing still at the feet. */
@@ -179,11 +201,6 @@ export class DropStage {
 			out[3 + k] = up[0] * (r[k] as number) + up[1] * (r[3 + k] as number);
 			out[6 + k] = r[6 + k] as number;
 		}
-	}
-
-	/** The stage triad of a heading at the stance: what "in front of you" means. */
-	get facingDirection(): readonly [number, number, number] {
-		return [Math.cos(this.drop.stance.facing), 0, Math.sin(this.drop.stance.facing)];
 	}
 }
 

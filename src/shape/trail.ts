@@ -1,4 +1,4 @@
-import type { Path } from "../activity/drop.ts";
+import type { Drop } from "../activity/drop.ts";
 import { ring } from "../vector/vec3.ts";
 import type { Part } from "./drawable.ts";
 import { LineBuilder, MeshBuilder } from "./mesh.ts";
@@ -30,7 +30,7 @@ interface TrailLook {
 }
 
 /** The trail of a path from 0 to `end` (s), in stage coordinates. */
-export function trailOf(frame: StageFrame, path: Path, end: number, look: TrailLook): Trail {
+export function trailOf(frame: StageFrame, path: Drop["flight"]["path"], end: number, look: TrailLook): Trail {
 	const n = Math.max(1, Math.min(MOST_SEGMENTS, Math.ceil(end * FINE)));
 	const state = new Float64Array(6);
 	const p = [0, 0, 0];
@@ -57,7 +57,7 @@ export function trailOf(frame: StageFrame, path: Path, end: number, look: TrailL
 	return {
 		parts: [line, dotPart],
 		show(t) {
-			line.count = Math.max(0, Math.min(n, Math.round((n * t) / end)));
+			line.count = end > 0 ? Math.max(0, Math.min(n, Math.round((n * t) / end))) : n;
 			dotPart.count = t < 0 ? 0 : perDot * (Math.min(count, Math.floor(t / DOT_EVERY + 1e-6)) + 1);
 		},
 	};

@@ -1,5 +1,5 @@
 import { describe, expect, test } from "vitest";
-import { printer } from "../../../app/panel/print.ts";
+import { printer } from "../../../app/store/print.ts";
 import {
 	findingWords,
 	fromFeetWords,

@@ -1,7 +1,7 @@
 import { useMemo } from "react";
 import { printExact, printNumber, type UnitSystem, unitIn, unitNamed, withUnit } from "../../src/quantity/print-quantity.ts";
 import { convertUnit } from "../../src/quantity/units.ts";
-import { useSession } from "../store/session.ts";
+import { useSession } from "./session.ts";
 
 export interface Printer {
 	/** A value in a unit of the file, a criterion or a formula, in the system chosen; three significant figures unless said, counts whole. */
