@@ -1,3 +1,4 @@
+import { availableParallelism } from "node:os";
 import { fileURLToPath } from "node:url";
 import react from "@vitejs/plugin-react";
 import { defineConfig } from "vitest/config";
@@ -54,7 +55,9 @@ export default defineConfig(({ mode }) => {
 			environment: "node",
 			include: mode === "long" ? ["test/**/*.long.test.{ts,tsx}"] : ["test/**/*.test.{ts,tsx}"],
 			exclude: mode === "long" ? [] : ["test/**/*.long.test.{ts,tsx}"],
-			testTimeout: mode === "long" ? 600_000 : 30_000,
+			// Left alone, the runner keeps one of two cores free.
+			maxWorkers: Math.max(2, availableParallelism() - 1),
+			testTimeout: mode === "long" ? 600_000 : 60_000,
 			hookTimeout: 180_000,
 			server: { deps: { inline: [/@react-three\//] } },
 		},
