@@ -86,11 +86,6 @@ export function dropLabels(picture: DropPicture, print: Print, verdict: string |
 					} as const,
 				]
 			: []),
-		...(["K", "C", "E", "A", "G"] as const).map(force),
-		{ anchor: "ghost", text: "if the ring did not turn", look: "note", tries: ROUND },
-		{ anchor: "up", text: "up", look: "axis", hang: "outward", tries: [] },
-		{ anchor: "prograde", text: "with spin", look: "axis", hang: "outward", tries: [] },
-		{ anchor: "axial", text: "axial", look: "axis", hang: "outward", tries: [] },
 		{ anchor: "rose", text: "on the object", look: "instrument", hang: "centred", tries: [] },
 		{ anchor: "rose-words", text: roseWords(picture), look: "instrument", hang: "centred", tries: [] },
 		{
@@ -101,6 +96,11 @@ export function dropLabels(picture: DropPicture, print: Print, verdict: string |
 			tries: [],
 			bar: step,
 		},
+		...(["K", "C", "E", "A", "G"] as const).map(force),
+		{ anchor: "ghost", text: "if the ring did not turn", look: "note", tries: ROUND },
+		{ anchor: "up", text: "up", look: "axis", hang: "outward", tries: [] },
+		{ anchor: "prograde", text: "with spin", look: "axis", hang: "outward", tries: [] },
+		{ anchor: "axial", text: "axial", look: "axis", hang: "outward", tries: [] },
 		{
 			anchor: "plumb",
 			text: plumbWords(picture, print),

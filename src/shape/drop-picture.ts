@@ -55,7 +55,7 @@ export type AnchorName = (typeof ANCHORS)[number];
 const AXIS_NAMES = ["prograde", "up", "axial"] as const;
 /** Of the instruments, CSS px. */
 const AXIS = { width: 144, height: 100, arm: 29, margin: 14, small: { width: 112, height: 84, arm: 22 } } as const;
-const ROSE = { width: 168, height: 178, arm: 54, margin: 14 } as const;
+const ROSE = { width: 184, height: 212, arm: 50, margin: 14 } as const;
 /** Of the scale bar beside the plumb in External. */
 const BAR = { beside: 92, above: 14 } as const;
 const PLUMB = { width: 104, height: 178, long: 84 } as const;
@@ -241,7 +241,7 @@ export class DropPicture {
 		let head: number;
 		let perMetre: number;
 		if (view === "eyepoint") {
-			hudPoint(camera, width, height, ROSE.margin + ROSE.width / 2, height - ROSE.margin - ROSE.height / 2 - 14, origin);
+			hudPoint(camera, width, height, ROSE.margin + ROSE.width / 2, height - ROSE.margin - ROSE.height / 2 - 10, origin);
 			const s = metresPerPixel(camera, height);
 			scale = this.longest > 0 ? (ROSE.arm * s) / this.longest : 0;
 			head = 15 * s;
