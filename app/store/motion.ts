@@ -8,6 +8,9 @@ export type { MotionEvent };
 /** Events of a motion in order, the release first; empty where the kind is not built. */
 export const eventsOf = (c: AssessedCase): readonly MotionEvent[] => (c.motion ? eventsOfDrop(c.motion) : []);
 
+/** How often the layout's windows pass a place that does not turn, Hz: their number times Ω / 2π. */
+export const flashRate = (c: AssessedCase): number => (c.context.habitat.windows.length * c.context.spin.greatestRate) / (2 * Math.PI);
+
 /** Length of the case's clock, s; 0 where the kind is not built. */
 export const durationOf = (c: AssessedCase): number => c.motion?.flight.end ?? 0;
 

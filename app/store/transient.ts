@@ -9,6 +9,8 @@ export const transient = {
 	time: 0,
 	/** Of the selected case's motion, s. */
 	duration: 0,
+	/** Playback is held at this many times real speed, so that no row of windows flashes more than three times a second. */
+	fastest: Number.POSITIVE_INFINITY,
 };
 
 type TimeListener = (time: number) => void;
@@ -36,10 +38,14 @@ export function setTime(time: number): void {
 	tell();
 }
 
-/** Starts the clock of another motion, stopped at `time`. */
-export function setMotion(duration: number, time: number): void {
+/** WCAG 2.2, success criterion 2.3.1: nothing flashes more than three times in any second. */
+const MOST_FLASHES = 3;
+
+/** Starts the clock of another motion, stopped at `time`; `flashes` is how often its windows pass a place that does not turn, Hz at real speed. */
+export function setMotion(duration: number, time: number, flashes = 0): void {
 	if (!(duration >= 0 && Number.isFinite(duration))) throw new RangeError(`a duration must be finite and at least 0 s, got ${duration}`);
 	transient.duration = duration;
+	transient.fastest = flashes > 0 ? MOST_FLASHES / flashes : Number.POSITIVE_INFINITY;
 	transient.time = Math.min(Math.max(time, 0), duration);
 	tell();
 }
@@ -51,7 +57,7 @@ export const LONGEST_FRAME = 0.1;
 export function advance(dt: number): boolean {
 	const { playing, speed } = useSession.getState();
 	if (!playing) return false;
-	setTime(transient.time + Math.min(Math.max(dt, 0), LONGEST_FRAME) * speed);
+	setTime(transient.time + Math.min(Math.max(dt, 0), LONGEST_FRAME) * Math.min(speed, transient.fastest));
 	if (transient.time < transient.duration) return true;
 	useSession.setState({ playing: false });
 	return false;
