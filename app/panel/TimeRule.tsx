@@ -2,7 +2,7 @@ import { type KeyboardEvent, useEffect, useRef } from "react";
 import { ruler } from "../../src/drawing/trace.ts";
 import { printNumber } from "../../src/quantity/print-quantity.ts";
 import { commandNamed } from "../command/all.ts";
-import { durationOf, eventsOf } from "../store/motion.ts";
+import { durationOf, eventsOf, fastestPlayback } from "../store/motion.ts";
 import { mayPlay, pause, stepTime, useSelectedCase } from "../store/navigate.ts";
 import { SPEEDS, useSession } from "../store/session.ts";
 import { onTime, setTime, transient } from "../store/transient.ts";
@@ -23,6 +23,7 @@ export function TimeRule() {
 	const c = useSelectedCase();
 	const playing = useSession((s) => s.playing);
 	const speed = useSession((s) => s.speed);
+	const fastest = c ? fastestPlayback(c) : Number.POSITIVE_INFINITY;
 	const still = useSession((s) => s.reducedMotion && s.view === "eyepoint");
 	const box = useRef<HTMLDivElement>(null);
 	const width = useWidth(box, 600);
@@ -102,6 +103,11 @@ export function TimeRule() {
 							</option>
 						))}
 					</select>
+					{speed > fastest && (
+						<span className="muted" role="status">
+							held at {fastest.toPrecision(2)} ×: windows flash at most 3 times a second
+						</span>
+					)}
 				</label>
 			)}
 		</section>

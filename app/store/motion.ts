@@ -8,8 +8,14 @@ export type { MotionEvent };
 /** Events of a motion in order, the release first; empty where the kind is not built. */
 export const eventsOf = (c: AssessedCase): readonly MotionEvent[] => (c.motion ? eventsOfDrop(c.motion) : []);
 
-/** How often the layout's windows pass a place that does not turn, Hz: their number times Ω / 2π. */
-export const flashRate = (c: AssessedCase): number => (c.context.habitat.windows.length * c.context.spin.greatestRate) / (2 * Math.PI);
+/** WCAG 2.2, success criterion 2.3.1: nothing flashes more than three times in any second. */
+const MOST_FLASHES = 3;
+
+/** Playback speed at which the layout's windows, passing a place that does not turn at N Ω / 2π, flash no more than that. */
+export function fastestPlayback(c: AssessedCase): number {
+	const flashes = (c.context.habitat.windows.length * c.context.spin.greatestRate) / (2 * Math.PI);
+	return flashes > 0 ? MOST_FLASHES / flashes : Number.POSITIVE_INFINITY;
+}
 
 /** Length of the case's clock, s; 0 where the kind is not built. */
 export const durationOf = (c: AssessedCase): number => c.motion?.flight.end ?? 0;

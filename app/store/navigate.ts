@@ -3,7 +3,7 @@ import { roundStep } from "../../src/quantity/round-step.ts";
 import type { AssessedCase, Finding } from "./core.ts";
 import { useDocument } from "./document.ts";
 import { findingKey, grouped, weightiest } from "./findings.ts";
-import { durationOf, eventsOf, flashRate } from "./motion.ts";
+import { durationOf, eventsOf, fastestPlayback } from "./motion.ts";
 import { type CaseKey, useSession, type View } from "./session.ts";
 import { setMotion, setTime, transient } from "./transient.ts";
 
@@ -35,7 +35,7 @@ function momentOf(f: Finding, c: AssessedCase): number {
 export function selectCase(c: AssessedCase, time: number): void {
 	if (!c.motion) return;
 	useSession.setState({ selected: keyOf(c), playing: false, finding: null, derivation: null, why: null });
-	setMotion(durationOf(c), time, flashRate(c));
+	setMotion(durationOf(c), time, fastestPlayback(c));
 }
 
 const built = (): readonly AssessedCase[] => useDocument.getState().assessed.cases.filter((c) => c.motion !== null);
@@ -115,7 +115,7 @@ export function followDocument(): () => void {
 			return;
 		}
 		const atEnd = transient.time === lastMoment(was);
-		setMotion(durationOf(is), atEnd ? lastMoment(is) : transient.time, flashRate(is));
+		setMotion(durationOf(is), atEnd ? lastMoment(is) : transient.time, fastestPlayback(is));
 		useSession.setState({ why: null });
 	});
 }

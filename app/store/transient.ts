@@ -38,14 +38,11 @@ export function setTime(time: number): void {
 	tell();
 }
 
-/** WCAG 2.2, success criterion 2.3.1: nothing flashes more than three times in any second. */
-const MOST_FLASHES = 3;
-
-/** Starts the clock of another motion, stopped at `time`; `flashes` is how often its windows pass a place that does not turn, Hz at real speed. */
-export function setMotion(duration: number, time: number, flashes = 0): void {
+/** Starts the clock of another motion, stopped at `time`, never played faster than `fastest` times real speed. */
+export function setMotion(duration: number, time: number, fastest = Number.POSITIVE_INFINITY): void {
 	if (!(duration >= 0 && Number.isFinite(duration))) throw new RangeError(`a duration must be finite and at least 0 s, got ${duration}`);
 	transient.duration = duration;
-	transient.fastest = flashes > 0 ? MOST_FLASHES / flashes : Number.POSITIVE_INFINITY;
+	transient.fastest = fastest;
 	transient.time = Math.min(Math.max(time, 0), duration);
 	tell();
 }

@@ -46,8 +46,10 @@ export interface Flight {
 }
 
 const NO_FIELD = ring(0, 0, 0);
+/** Nothing is followed longer than this, s: a third of a year, ten turns at 6e-5 rpm. */
+const MOST_FOLLOWED = 1e7;
 /** A flight is followed for 10 turns at the rate of its release, or 600 s where that is longer. */
-export const longestFlight = (rate: number): number => (rate > 0 ? Math.max(600, (20 * Math.PI) / rate) : 600);
+export const longestFlight = (rate: number): number => (rate > 0 ? Math.min(MOST_FOLLOWED, Math.max(600, (20 * Math.PI) / rate)) : 600);
 
 /** Where a released sphere goes and what it first strikes (mechanics: free flight). Bounce and roll are not modelled. */
 export function fly(world: World, spin: Spin, release: Release): Flight {

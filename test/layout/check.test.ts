@@ -1,5 +1,6 @@
 import { readFileSync } from "node:fs";
 import { describe, expect, test } from "vitest";
+import { parseLayout } from "../../src/layout/parse.ts";
 import { problemLine } from "../../src/layout/problem.ts";
 import { changed, type Damaged, damaged } from "./support.ts";
 
@@ -419,4 +420,15 @@ test("what refers to an entry that cannot be read is not called dangling", () =>
 		'habitat.decks[0].radius_m: "wide", expected a number from 0.5 to 10000 m',
 		"elements[0].rung_spacing_m: 0, expected a number from 0.01 to 100 m",
 	]);
+});
+
+test("an object too light for its size is refused where the air slows it, and only there", () => {
+	const layout = (drag: boolean) => {
+		const file = JSON.parse(readFileSync("assets/layout/larkspur.layout.json", "utf8"));
+		Object.assign(file.activities[1], { drag, object: { mass_kg: 1e-6, diameter_m: 0.5, drag_coefficient: 10 } });
+		return parseLayout(JSON.stringify(file));
+	};
+	const refused = layout(true);
+	expect(refused.ok ? [] : refused.problems.map((p) => p.path)).toEqual(["activities[1].object.mass_kg"]);
+	expect(layout(false).ok).toBe(true);
 });

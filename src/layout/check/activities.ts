@@ -41,7 +41,21 @@ function* placeProblems(
 	if (upright.length === 0) yield* placeWithin(path, place, deck, height);
 }
 
+/** Largest C_d A / m that is followed through the air, m²/kg: lighter than any down feather, it would only drift with the air. */
+const MOST_DRAG = 500;
+
+function* dragProblems(path: string, { drag, object }: ActivityOf<"drop">): Problems {
+	const share = (object.drag_coefficient * Math.PI * object.diameter_m ** 2) / 4;
+	if (!drag || share <= MOST_DRAG * object.mass_kg) return;
+	yield problem(
+		below(below(path, "object"), "mass_kg"),
+		object.mass_kg,
+		`at least ${told(share / MOST_DRAG)} kg for this size and drag coefficient`,
+	);
+}
+
 function* dropProblems(context: Context, path: string, a: ActivityOf<"drop">): Problems {
+	yield* dragProblems(path, a);
 	const from = below(path, "from");
 	yield* named(context, from, a.from.deck);
 	const deck = context.decks.byId.get(a.from.deck);
