@@ -2,19 +2,19 @@ import type { Drop } from "../activity/drop.ts";
 import type { CaseSummary } from "../activity/result.ts";
 import { cylindricalFromRing } from "../frame/place.ts";
 import { angleNear, type Deck, type Habitat, heightAbove } from "../layout/habitat.ts";
-import { type LayoutFile, NOMINAL } from "../layout/schema.ts";
+import { type ActivityKind, type LayoutFile, NOMINAL } from "../layout/schema.ts";
 import { degFromRad, radpsFromRpm } from "../quantity/convert.ts";
 import { written } from "../quantity/round.ts";
 import { ring } from "../vector/vec3.ts";
-import { judge, marginOf, type Subject } from "./judge.ts";
-import { DECK_QUANTITIES, DROP_QUANTITIES, type Quantity, summaryQuantity } from "./quantity.ts";
+import { judge, type Subject } from "./judge.ts";
+import { DECK_QUANTITIES, DROP_QUANTITIES, named, type Quantity, summaryQuantity } from "./quantity.ts";
 import type { CriterionRow, Finding, FindingPlace } from "./row.ts";
 import { rowsFor } from "./rows.ts";
 
 /** What of an assessed case the criteria look at. */
 export interface JudgedCase extends CaseSummary {
 	readonly id: string;
-	readonly kind: string;
+	readonly kind: ActivityKind;
 	readonly crew: string;
 	readonly phase: string;
 	readonly motion: Drop | null;
@@ -22,7 +22,7 @@ export interface JudgedCase extends CaseSummary {
 
 /** Every row of the layout's sets against every subject and case it applies to. Force and basis never mix into one total. */
 export function evaluate(layout: LayoutFile, habitat: Habitat, cases: readonly JudgedCase[], shipped: readonly CriterionRow[]): Finding[] {
-	const { rows, missing } = rowsFor(layout, shipped);
+	const { rows, missing, untailored } = rowsFor(layout, shipped);
 	const findings: Finding[] = [];
 	for (const row of rows) {
 		for (const about of row.appliesTo) {
@@ -31,13 +31,14 @@ export function evaluate(layout: LayoutFile, habitat: Habitat, cases: readonly J
 			for (const element of layout.elements ?? []) if (element.kind === about) findings.push(elementFinding(row, element.id));
 		}
 	}
-	for (const set of missing) findings.push(unbuiltSet(set));
+	for (const set of missing) findings.push(leadsNowhere(set, `Criteria set "${set}"`, "no row of this set is shipped yet"));
+	for (const { criterion, reason } of untailored) findings.push(leadsNowhere(criterion, `Tailored limit of "${criterion}"`, reason));
 	return findings;
 }
 
 function caseFinding(habitat: Habitat, row: CriterionRow, c: JudgedCase): Finding {
-	const special = c.motion ? DROP_QUANTITIES[row.quantity] : undefined;
-	const quantity: Quantity = special && c.motion ? special.of(c.motion, habitat.decks) : caseQuantity(row, c);
+	const special = c.motion ? named(DROP_QUANTITIES, row.quantity) : undefined;
+	const quantity: Quantity = special && c.motion ? special(c.motion, habitat.decks) : caseQuantity(row, c);
 	const who: Subject = { subject: c.id, crew: c.crew, phase: c.phase, at: c.motion ? strikePlace(habitat, c.motion) : {} };
 	return judge(row, who, quantity, "transient");
 }
@@ -63,33 +64,40 @@ function strikePlace(habitat: Habitat, drop: Drop): FindingPlace {
 	};
 }
 
-/** Standing rows on every deck in every phase; on a spin profile the worst of its points. */
+/** Standing rows on every deck in every phase; the worst of the points of a spin profile and of the middle and the ends of a flat floor. */
 function deckFindings(layout: LayoutFile, habitat: Habitat, row: CriterionRow): Finding[] {
-	const known = DECK_QUANTITIES[row.quantity];
+	const known = named(DECK_QUANTITIES, row.quantity);
 	const { spin, phases } = layout.habitat;
-	const held = [
+	const phasesHeld = [
 		{ phase: NOMINAL, rates: spin.profile ? spin.profile.map((p) => p.rate_rpm) : [spin.rate_rpm] },
 		...(phases ?? []).map((p) => ({ phase: p.id, rates: [p.rate_rpm] })),
 	];
 	const tallest = layout.crew.reduce<{ id: string; stature_m: number } | null>((a, c) => (a && a.stature_m >= c.stature_m ? a : c), null);
-	return held.flatMap(({ phase, rates }) =>
+	return phasesHeld.flatMap(({ phase, rates }) =>
 		habitat.decks.map((deck) => {
-			const who: Subject = {
+			const at = (angle: number): Subject => ({
 				subject: deck.id,
 				crew: known?.needsCrew ? (tallest?.id ?? null) : null,
 				phase,
 				at: {
 					deck: deck.id,
-					angle_deg: written(degFromRad(deck.middle)),
+					angle_deg: written(degFromRad(angle)),
 					axial_m: written((deck.axialFrom + deck.axialTo) / 2),
 					height_m: 0,
 				},
-			};
-			if (!known) return judge(row, who, { value: null, reason: `"${row.quantity}" is not a quantity of the habitat` }, "sustained");
-			if (known.needsCrew && !tallest) return judge(row, who, { value: null, reason: "the layout has no crew" }, "sustained");
-			const values = rates.map((rpm) => written(known.of(deck, radpsFromRpm(rpm), tallest?.stature_m ?? 0)));
-			const worst = values.reduce((a, b) => (marginOf(row.comparison, b, row.limit) < marginOf(row.comparison, a, row.limit) ? b : a));
-			return judge(row, who, { value: worst }, "sustained");
+			});
+			if (!known)
+				return judge(row, at(deck.middle), { value: null, reason: `"${row.quantity}" is not a quantity of the habitat` }, "sustained");
+			if (known.needsCrew && !tallest) return judge(row, at(deck.middle), { value: null, reason: "the layout has no crew" }, "sustained");
+			const angles = deck.floor === "curved" ? [deck.middle] : [deck.middle, deck.from, deck.to];
+			const held = rates.flatMap((rpm) =>
+				angles.map((angle) => ({
+					angle,
+					value: written(known.of(deck.radius / Math.cos(angle - deck.middle), radpsFromRpm(rpm), tallest?.stature_m ?? 0)),
+				})),
+			);
+			const worst = held.reduce((a, b) => ((row.comparison === "at-most" ? b.value > a.value : b.value < a.value) ? b : a));
+			return judge(row, at(worst.angle), { value: worst.value, unit: known.unit }, "sustained");
 		}),
 	);
 }
@@ -97,10 +105,10 @@ function deckFindings(layout: LayoutFile, habitat: Habitat, row: CriterionRow): 
 const elementFinding = (row: CriterionRow, id: string): Finding =>
 	judge(row, { subject: id, crew: null, phase: NOMINAL, at: {} }, { value: null, reason: "not built" }, "sustained");
 
-/** A set that the layout names and no shipped row belongs to: said, not dropped. */
-const unbuiltSet = (set: string): Finding => ({
-	criterion: set,
-	title: `Criteria set "${set}"`,
+/** What the layout's criteria name and nothing stands for: said, not dropped. */
+const leadsNowhere = (criterion: string, title: string, reason: string): Finding => ({
+	criterion,
+	title,
 	force: "information",
 	subject: "layout",
 	crew: null,
@@ -113,7 +121,7 @@ const unbuiltSet = (set: string): Finding => ({
 	margin: null,
 	at: {},
 	result: "not-assessed",
-	reason: "no row of this set is shipped yet",
+	reason,
 	basis: "unverified",
 	source: "",
 	note: "",

@@ -1,4 +1,5 @@
 import { written } from "../quantity/round.ts";
+import { inLimitUnit } from "./limit-unit.ts";
 import type { Quantity } from "./quantity.ts";
 import type { CriterionRow, Finding, FindingPlace } from "./row.ts";
 
@@ -16,15 +17,16 @@ export function marginOf(comparison: "at-most" | "at-least", value: number, limi
 	return written(limit === 0 ? room : room / Math.abs(limit));
 }
 
-/** Holds one row against one quantity: the only place where a result is decided, on the written values. */
-export function judge(row: CriterionRow, who: Subject, quantity: Quantity, exposure: "sustained" | "transient"): Finding {
+/** Holds one row against one quantity: the only place where a result is decided, on the written values in the unit of the limit. */
+export function judge(row: CriterionRow, who: Subject, found: Quantity, exposure: "sustained" | "transient"): Finding {
+	const quantity = inLimitUnit(found, row.unit);
 	const base = {
 		criterion: row.id,
 		title: row.title,
 		force: row.force,
 		...who,
 		quantity: row.quantity,
-		unit: row.unit,
+		unit: quantity.value === null ? row.unit : quantity.unit,
 		limit: row.limit,
 		comparison: row.comparison,
 		basis: row.basis,

@@ -1,42 +1,43 @@
 import type { Drop } from "../activity/drop.ts";
+import { SUMMARY_KEYS } from "../activity/keys.ts";
 import type { CaseSummary } from "../activity/result.ts";
 import { angleNear, type Deck, floorAlong } from "../layout/habitat.ts";
+import type { ActivityKind } from "../layout/schema.ts";
 import { STANDARD_GRAVITY } from "../quantity/constants.ts";
 import { rpmFromRadps } from "../quantity/convert.ts";
 
-/** A quantity as a criterion asks for it: a value, or why there is none. */
-export type Quantity = { readonly value: number } | { readonly value: null; readonly reason: string };
+/** A quantity as a criterion asks for it: a value in its unit, or why there is none. */
+export type Quantity = { readonly value: number; readonly unit: string } | { readonly value: null; readonly reason: string };
 
-/** The standing quantities of a deck at one spin rate (rad/s) for a stature (m). */
+/** The standing quantities of a deck at one place of its floor, by the radius (m) there, at one spin rate (rad/s) for a stature (m). */
 export const DECK_QUANTITIES: Readonly<
-	Record<string, { readonly unit: string; readonly needsCrew: boolean; of(deck: Deck, rate: number, stature: number): number }>
+	Record<string, { readonly unit: string; readonly needsCrew: boolean; of(radius: number, rate: number, stature: number): number }>
 > = {
-	spin_rate_rpm: { unit: "rpm", needsCrew: false, of: (_deck, rate) => rpmFromRadps(rate) },
-	floor_level_g: { unit: "g", needsCrew: false, of: (deck, rate) => (rate * rate * deck.radius) / STANDARD_GRAVITY },
-	rim_speed_mps: { unit: "m/s", needsCrew: false, of: (deck, rate) => rate * deck.radius },
+	spin_rate_rpm: { unit: "rpm", needsCrew: false, of: (_radius, rate) => rpmFromRadps(rate) },
+	floor_level_g: { unit: "g", needsCrew: false, of: (radius, rate) => (rate * rate * radius) / STANDARD_GRAVITY },
+	rim_speed_mps: { unit: "m/s", needsCrew: false, of: (radius, rate) => rate * radius },
 	/** Head-to-foot difference as a share of the level at the feet: h/R. */
-	head_to_foot_percent: { unit: "%", needsCrew: true, of: (deck, _rate, stature) => (100 * stature) / deck.radius },
+	head_to_foot_percent: { unit: "%", needsCrew: true, of: (radius, _rate, stature) => (100 * stature) / radius },
 	/** The same over a fixed 2 m. */
-	gradient_per_2m_percent: { unit: "%", needsCrew: false, of: (deck) => 200 / deck.radius },
+	gradient_per_2m_percent: { unit: "%", needsCrew: false, of: (radius) => 200 / radius },
 	/** Ω², in g a metre. */
-	gradient_g_per_m: { unit: "g/m", needsCrew: false, of: (_deck, rate) => (rate * rate) / STANDARD_GRAVITY },
+	gradient_g_per_m: { unit: "g/m", needsCrew: false, of: (_radius, rate) => (rate * rate) / STANDARD_GRAVITY },
 };
 
 /** Quantities of a drop that are not summary keys. */
-export const DROP_QUANTITIES: Readonly<Record<string, { readonly unit: string; of(drop: Drop, decks: readonly Deck[]): Quantity }>> = {
+export const DROP_QUANTITIES: Readonly<Record<string, (drop: Drop, decks: readonly Deck[]) => Quantity>> = {
 	/** From the struck sphere's rim to the nearest walkway's edge on the struck floor; negative inside. */
-	walkway_clearance_m: { unit: "m", of: walkwayClearance },
-	/** 1 where the sphere's rim comes down inside a walkway, else 0. */
-	walkway_landings: {
-		unit: "",
-		of: (drop, decks) => {
-			const clearance = walkwayClearance(drop, decks);
-			return clearance.value === null ? clearance : { value: clearance.value < 0 ? 1 : 0 };
-		},
+	walkway_clearance_m: walkwayClearance,
+	/** 1 where the sphere's rim comes down inside a walkway, else 0: also where no walkway is there or nothing comes down on a floor. */
+	walkway_landings: (drop, decks) => {
+		const { value } = walkwayClearance(drop, decks);
+		return count(value !== null && value < 0 ? 1 : 0);
 	},
-	hatches_passed: { unit: "", of: (drop) => ({ value: drop.flight.passed.length }) },
-	coamings_struck: { unit: "", of: (drop) => ({ value: drop.flight.struck.kind === "coaming" ? 1 : 0 }) },
+	hatches_passed: (drop) => count(drop.flight.passed.length),
+	coamings_struck: (drop) => count(drop.flight.struck.kind === "coaming" ? 1 : 0),
 };
+
+const count = (value: number): Quantity => ({ value, unit: "" });
 
 function walkwayClearance(drop: Drop, decks: readonly Deck[]): Quantity {
 	const { struck } = drop.flight;
@@ -55,13 +56,18 @@ function walkwayClearance(drop: Drop, decks: readonly Deck[]): Quantity {
 		const outside = Math.hypot(Math.max(0, beyondAlong), Math.max(0, beyondAxial));
 		least = Math.min(least, outside > 0 ? outside : Math.max(beyondAlong, beyondAxial));
 	}
-	return { value: least - drop.object.diameter / 2 };
+	return { value: least - drop.object.diameter / 2, unit: "m" };
 }
 
+/** The entry of a free name; not what every object inherits. */
+export const named = <T>(record: Readonly<Record<string, T>>, name: string): T | undefined =>
+	Object.hasOwn(record, name) ? record[name] : undefined;
+
 /** A summary key as a quantity. */
-export function summaryQuantity(found: CaseSummary, key: string, kind: string): Quantity {
-	if (!(key in found.summary)) return { value: null, reason: `"${key}" is not a quantity of a ${kind}` };
+export function summaryQuantity(found: CaseSummary, key: string, kind: ActivityKind): Quantity {
+	const unit = named(SUMMARY_KEYS[kind], key);
+	if (unit === undefined) return { value: null, reason: `"${key}" is not a quantity of a ${kind}` };
 	const value = found.summary[key];
-	if (typeof value === "number") return { value };
-	return { value: null, reason: value === null ? (found.reasons[key] ?? "it does not exist") : `"${key}" is not a number` };
+	if (typeof value === "number") return { value, unit };
+	return { value: null, reason: value == null ? (found.reasons[key] ?? "it does not exist") : `"${key}" is not a number` };
 }

@@ -8,10 +8,11 @@ export interface CriterionRow {
 	readonly set: string;
 	/** Activity kinds or element kinds, or "habitat" for rows on every deck in every phase. */
 	readonly appliesTo: readonly string[];
-	/** A summary key, or a quantity named in evaluate.ts. */
+	/** A summary key, or a quantity named in quantity.ts. */
 	readonly quantity: string;
 	readonly comparison: "at-most" | "at-least";
 	readonly limit: number;
+	/** Of the limit; empty: that of the quantity. */
 	readonly unit: string;
 	readonly force: "shall" | "should" | "information";
 	readonly basis: Basis;
@@ -31,9 +32,12 @@ export interface Finding {
 	readonly subject: string;
 	readonly crew: string | null;
 	readonly phase: string;
+	/** Empty where the finding is about no row: a set or a tailoring that leads nowhere. */
 	readonly quantity: string;
 	readonly value: number | null;
+	/** Of value and limit both. */
 	readonly unit: string;
+	/** Stands for nothing (0) where `quantity` is empty. */
 	readonly limit: number;
 	readonly comparison: "at-most" | "at-least";
 	/** Relative; null where not assessed. */

@@ -46,9 +46,46 @@ describe("rows on the habitat", () => {
 			{ id: "short", stature_m: 1.5, mass_kg: 50 },
 			{ id: "tall", stature_m: 1.9, mass_kg: 90 },
 		];
-		const [finding] = found({ crew }, onDecks({ quantity, limit: 100 }));
+		const [finding] = found({ crew }, onDecks({ quantity, limit: 100, unit: "" }));
 		expect(finding!.value).toBeCloseTo(value, 7);
 		expect(finding!.crew).toBe(quantity === "head_to_foot_percent" ? "tall" : null);
+	});
+
+	describe("on a flat floor", () => {
+		const flat = deckFile({ floor: "flat", radius_m: 20, from_deg: -30, to_deg: 20 });
+		const [middle, low] = [-5, -30];
+		const held = (over: Partial<CriterionRow>, deck = flat) => found({ decks: [deck] }, onDecks(over))[0]!;
+		const away = 20 / Math.cos((25 * Math.PI) / 180);
+
+		it.each([
+			["floor_level_g", "at-most", level(3.6, away), low],
+			["floor_level_g", "at-least", level(3.6, 20), middle],
+			["rim_speed_mps", "at-most", 0.12 * Math.PI * away, low],
+			["rim_speed_mps", "at-least", 0.12 * Math.PI * 20, middle],
+			["head_to_foot_percent", "at-most", 175 / 20, middle],
+			["head_to_foot_percent", "at-least", 175 / away, low],
+			["gradient_per_2m_percent", "at-least", 200 / away, low],
+			["spin_rate_rpm", "at-most", 3.6, middle],
+			["gradient_g_per_m", "at-least", (0.12 * Math.PI) ** 2 / 9.80665, middle],
+		] as const)("%s %s is held at the middle and both ends, the worst told: %d", (quantity, comparison, value, angle_deg) => {
+			const finding = held({ quantity, comparison, limit: 1, unit: "" });
+			expect(finding.value).toBeCloseTo(value, 7);
+			expect(finding.at).toMatchObject({ angle_deg });
+		});
+
+		it("decides there: within at the middle, outside at the ends", () => {
+			const limit = (level(3.6, 20) + level(3.6, away)) / 2;
+			expect(held({ limit })).toMatchObject({ result: "outside" });
+			expect(held({ limit }, deckFile({ radius_m: 20, from_deg: -30, to_deg: 20 }))).toMatchObject({ result: "within" });
+		});
+	});
+
+	it("name an unknown quantity though every object has one of that name", () => {
+		for (const appliesTo of [["habitat"], ["drop"]])
+			expect(found({ activities: [dropFile()] }, rowOf({ appliesTo, quantity: "constructor" }))[0]).toMatchObject({
+				result: "not-assessed",
+				reason: expect.stringContaining('"constructor" is not a quantity'),
+			});
 	});
 
 	it("say why where there is nothing to hold", () => {
@@ -135,6 +172,34 @@ it("a set that no row belongs to is reported, not dropped", () => {
 		["row", "within"],
 		["grip", "not-assessed"],
 	]);
+});
+
+it("a tailored limit that belongs to no row is reported, not dropped", () => {
+	const findings = found({ tailor: [{ criterion: "rowe", limit: 1, reason: "A slip." }] }, onDecks({ limit: 1 }));
+	expect(findings.slice(1)).toMatchObject([
+		{ criterion: "rowe", force: "information", subject: "layout", value: null, result: "not-assessed", reason: "no criterion has this id" },
+	]);
+});
+
+it("a limit of the layout's own is held in its own unit", () => {
+	const own = {
+		id: "slow",
+		title: "Comes down slowly",
+		applies_to: "drop",
+		quantity: "landing_speed_mps",
+		comparison: "at-most",
+		limit: 10,
+		unit: "km/h",
+		force: "shall",
+		basis: "common-practice",
+		source: "",
+		note: "",
+	} as const;
+	const of = (unit: string) => found({ own: [{ ...own, unit }], activities: [dropFile()] })[0]!;
+	const speed = of("m/s");
+	expect(speed.result).toBe("within");
+	expect(of("km/h")).toMatchObject({ value: expect.closeTo((speed.value as number) * 3.6, 6), unit: "km/h", limit: 10, result: "outside" });
+	expect(of("kg")).toMatchObject({ result: "not-assessed", reason: "the limit is in kg, the quantity in m/s" });
 });
 
 describe("exit status", () => {

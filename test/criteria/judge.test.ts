@@ -6,7 +6,7 @@ import { rowOf } from "./row-of.ts";
 
 const WHO = { subject: "drop", crew: "one", phase: "nominal", at: {} };
 const held = (over: Partial<CriterionRow>, quantity: Quantity | number, exposure: "sustained" | "transient" = "transient") =>
-	judge(rowOf(over), WHO, typeof quantity === "number" ? { value: quantity } : quantity, exposure);
+	judge(rowOf(over), WHO, typeof quantity === "number" ? { value: quantity, unit: "J" } : quantity, exposure);
 
 describe("margins", () => {
 	it.each([
@@ -83,7 +83,7 @@ it("a finding says what it rests on", () => {
 		unit: "J",
 		title: "Energy",
 	});
-	expect(judge(row, { ...WHO, at: { t_s: 1 } }, { value: 1 }, "transient")).toMatchObject({
+	expect(judge(row, { ...WHO, at: { t_s: 1 } }, { value: 1, unit: "J" }, "transient")).toMatchObject({
 		criterion: row.id,
 		title: "Energy",
 		force: "shall",

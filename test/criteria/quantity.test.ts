@@ -18,7 +18,7 @@ function held(quantity: string, deck: DeckFile, angle: number, axial: number, ov
 		release: { ...down.release, elevation_deg: elevation },
 	});
 	const layout = layoutOf({ spin: STILL, decks: [deck], use: ["test-set"], activities: [file], ...over });
-	return assess(layout, [rowOf({ quantity, comparison: "at-least", limit: 0, unit: "m" })]).findings[0]!;
+	return assess(layout, [rowOf({ quantity, comparison: "at-least", limit: 0, unit: "" })]).findings[0]!;
 }
 
 describe("walkway clearance: from the sphere's rim to the nearest edge, negative inside", () => {
@@ -67,7 +67,12 @@ describe("walkway clearance: from the sphere's rim to the nearest edge, negative
 	it("makes a landing on a walkway where it is negative", () => {
 		const landings = (axial: number) => held("walkway_landings", curved, 10, axial).value;
 		expect([0, 0.5, 0.5499, 0.5501, 2].map(landings)).toEqual([1, 1, 1, 0, 0]);
-		expect(held("walkway_landings", deckFile(), 0, 0)).toMatchObject({ value: null, reason: 'deck "lower" has no walkway' });
+	});
+
+	it("there is no such landing where there is no walkway or nothing comes down on a floor", () => {
+		expect(held("walkway_landings", deckFile(), 0, 0)).toMatchObject({ value: 0, result: "within" });
+		expect(held("walkway_landings", curved, 10, 0, {}, 90)).toMatchObject({ value: 0, result: "within" });
+		expect(held("walkway_landings", curved, 10, 0)).toMatchObject({ value: 1 });
 	});
 
 	it("does not exist where there is no walkway or no floor is struck", () => {

@@ -73,4 +73,24 @@ describe("rows for a layout", () => {
 		expect(row("mine")).toMatchObject({ limit: 1, note: "n Tailored from 3 m/s: Own." });
 		expect(shipped[1]!.limit).toBe(5);
 	});
+
+	it("of the layout's own replace a shipped one of the same id, and say so; tailoring changes only that one", () => {
+		const tailor = [{ criterion: "a", limit: 1, reason: "Own." }];
+		const parts = { own: [{ ...own, id: "a", unit: "" }], tailor };
+		const { rows } = rowsFor(layoutOf({ use: ["one"], ...parts }), shipped);
+		expect(rows.map((r) => [r.id, r.set, r.limit])).toEqual([
+			["c", "always", 2],
+			["a", "own", 1],
+		]);
+		expect(rows[1]!.note).toBe("n Replaces the shipped criterion of this id. Tailored from 3: Own.");
+		expect(rowsFor(layoutOf(parts), shipped).rows.find((r) => r.id === "a")!.note).toBe("n Tailored from 3: Own.");
+	});
+
+	it("say which tailoring belongs to none of them, and why", () => {
+		const tailor = ["a", "b", "d"].map((criterion) => ({ criterion, limit: 1, reason: "r" }));
+		expect(rowsFor(layoutOf({ use: ["one"], tailor }), shipped).untailored).toEqual([
+			{ criterion: "b", reason: 'the layout does not use its set "two"' },
+			{ criterion: "d", reason: "no criterion has this id" },
+		]);
+	});
 });
