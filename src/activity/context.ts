@@ -9,7 +9,7 @@ export interface Context {
 	readonly world: World;
 	/** Its time 0 is the activity's. */
 	readonly spin: Spin;
-	/** The phase, and whether its rate changes during the activity. */
+	/** Id of the phase. */
 	readonly phase: string;
 	readonly person: Person;
 	readonly canals: CanalConstants;

@@ -4,11 +4,10 @@ import type { Pose } from "../body/pose.ts";
 import { trunk } from "../body/skeleton.ts";
 import { apparentParts } from "../frame/apparent.ts";
 import { cylindricalFromRing, localFromRing, ringFromLocal, type Triad } from "../frame/place.ts";
-import { angleNear, deckTriad, placeOnDeck, type WindowOpening } from "../layout/habitat.ts";
+import { angleNear, type Deck, deckTriad, heightAbove, placeOnDeck, type WindowOpening } from "../layout/habitat.ts";
 import { degFromRad, gFromMps2 } from "../quantity/convert.ts";
 import { written } from "../quantity/round.ts";
 import { add, dot, type HeadVec, head, type LocalVec, length, local, type RingVec, ring, scale, sub } from "../vector/vec3.ts";
-import type { CanalConstants } from "../vestibular/constants.ts";
 import { canalReport } from "../vestibular/report.ts";
 import type { Context } from "./context.ts";
 import { type Drop, eventsOfDrop } from "./drop.ts";
@@ -29,9 +28,9 @@ interface HeadSample {
 	readonly gaze: RingVec;
 }
 
-/** Every series key of the contract for a drop; null where a direction does not exist (no weight). */
-export function dropSeries(context: Context, drop: Drop, canals: CanalConstants): Series {
-	const { spin } = context;
+/** Every series key of the contract for a drop; null where a direction does not exist (no weight) or no stars are to be seen. */
+export function dropSeries(context: Context, drop: Drop): Series {
+	const { spin, canals } = context;
 	const duration = drop.flight.end;
 	const step = Math.max(STEP, duration / MOST_STEPS);
 	const count = Math.floor(duration / step + 1e-9) + 1;
@@ -58,14 +57,15 @@ export function dropSeries(context: Context, drop: Drop, canals: CanalConstants)
 		Math.hypot(...[0, 1, 2].map((k) => (a[3 * i + k] as number) - (b ? (b[3 * i + k] as number) : 0)));
 	const at = (i: number): HeadVec => head(report[3 * i] as number, report[3 * i + 1] as number, report[3 * i + 2] as number);
 
-	const stand = times.map((t) => localFromRing(triad, apparentParts(spin, t, stance.position, ring(0, 0, 0), ring(0, 0, 0)).sum));
+	const feet = stance.given ? stance.position : belowRelease(drop);
+	const floor = deckTriad(deck, cylindricalFromRing(feet).angle);
+	const stand = times.map((t) => localFromRing(floor, apparentParts(spin, t, feet, ring(0, 0, 0), ring(0, 0, 0)).sum));
 	const object = times.map((t) => objectSample(context, drop, t));
 	const numbers = (f: (i: number) => number): number[] => times.map((_, i) => written(f(i)));
 	const directions = (f: (i: number) => number): (number | null)[] =>
 		times.map((_, i) => (length(stand[i] as LocalVec) > 0 ? written(f(i)) : null));
 	const vectors = (f: (i: number) => LocalVec): number[][] => times.map((_, i) => [...f(i)].map(written));
 	const down = (i: number): number => -(stand[i] as LocalVec)[1];
-	const perSecond = (radps: number): number => degFromRad(radps);
 	return {
 		t_s: numbers((i) => i * step),
 		level_g: numbers((i) => gFromMps2(length(stand[i] as LocalVec))),
@@ -77,11 +77,13 @@ export function dropSeries(context: Context, drop: Drop, canals: CanalConstants)
 		e_mps2: vectors((i) => (object[i] as ObjectSample).euler),
 		a_mps2: vectors((i) => (object[i] as ObjectSample).own),
 		lateral_mps2: numbers((i) => Math.hypot((stand[i] as LocalVec)[0], (stand[i] as LocalVec)[2])),
-		eyes_degps: numbers((i) => perSecond(length(turns[i] as HeadVec))),
-		stars_degps: numbers((i) => (windowInView(context, drop, heads[i] as HeadSample) ? perSecond(length(omega(i, true))) : 0)),
-		ear_degps: numbers((i) => perSecond(size(report, i))),
-		illusion_degps: numbers((i) => perSecond(size(report, i, still))),
-		disagree_degps: numbers((i) => perSecond(length(sub(turns[i] as HeadVec, at(i))))),
+		eyes_degps: numbers((i) => degFromRad(length(turns[i] as HeadVec))),
+		stars_degps: times.map((_, i) =>
+			windowInView(context, drop, heads[i] as HeadSample) ? written(degFromRad(length(omega(i, true)))) : null,
+		),
+		ear_degps: numbers((i) => degFromRad(size(report, i))),
+		illusion_degps: numbers((i) => degFromRad(size(report, i, still))),
+		disagree_degps: numbers((i) => degFromRad(length(sub(turns[i] as HeadVec, at(i))))),
 		radius_m: numbers((i) => (object[i] as ObjectSample).radius),
 		angle_deg: numbers((i) => degFromRad((object[i] as ObjectSample).angle)),
 		axial_m: numbers((i) => (object[i] as ObjectSample).axial),
@@ -162,6 +164,24 @@ function windowInView(context: Context, drop: Drop, sample: HeadSample): boolean
 }
 const windowCentre = (drop: Drop, w: WindowOpening): RingVec => placeOnDeck(drop.deck, w.angle, w.axial, w.height);
 
+/** The floor point straight below the release. */
+function belowRelease({ deck, position }: Drop): RingVec {
+	const { up } = deckTriad(deck, cylindricalFromRing(position).angle);
+	return add(position, scale(up, -heightAbove(deck, position)));
+}
+
+/** The deck whose bay holds the object at a time; within a hatch the one it came from. */
+function deckHolding({ habitat }: Context, { deck, flight }: Drop, t: number): Deck {
+	let index = deck.index;
+	for (const [i, id] of flight.passed.entries()) {
+		const hatch = habitat.hatches.find((h) => h.id === id);
+		if (!hatch) throw new RangeError(`the flight passed "${id}", which is no hatch`);
+		if ((flight.passedAt[i] as number) <= t) index = hatch.deck === index ? (hatch.below ?? index) : hatch.deck;
+	}
+	return habitat.decks[index] as Deck;
+}
+
+/** Parts in the axes of the deck that holds the object. */
 interface ObjectSample {
 	readonly centrifugal: LocalVec;
 	readonly coriolis: LocalVec;
@@ -181,7 +201,7 @@ function objectSample(context: Context, drop: Drop, t: number): ObjectSample {
 	const free = apparentParts(context.spin, t, position, velocity, ring(0, 0, 0));
 	const slowed = add(free.sum, scale(velocity, -drop.drag * length(velocity)));
 	const place = cylindricalFromRing(position);
-	const triad = deckTriad(drop.deck, place.angle);
+	const triad = deckTriad(deckHolding(context, drop, t), place.angle);
 	return {
 		centrifugal: localFromRing(triad, free.centrifugal),
 		coriolis: localFromRing(triad, free.coriolis),

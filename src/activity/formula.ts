@@ -1,3 +1,5 @@
+import { RELATIVE_TOLERANCE } from "../flight/drag-path.ts";
+
 /** The formulas that summary numbers come from: what the derivation prints. */
 export interface Formula {
 	readonly title: string;
@@ -49,7 +51,7 @@ export const FORMULAS = {
 			{ symbol: "A", meaning: "frontal area, π d² / 4", unit: "m²" },
 			{ symbol: "m", meaning: "mass of the object", unit: "kg" },
 		],
-		source: "Quadratic drag, OpenStax College Physics §5.2; integrated by Dormand & Prince 5(4), relative tolerance 1e-9",
+		source: `Quadratic drag, OpenStax College Physics §5.2; integrated by Dormand & Prince 5(4), relative tolerance ${RELATIVE_TOLERANCE}`,
 		dropped: "Lift and spin of the object, and the rise of air density towards the rim (0.6 % at 100 m and 1 g).",
 	},
 	"first-contact": {
@@ -102,10 +104,13 @@ export const FORMULAS = {
 	},
 	"without-turning": {
 		title: "From where it would land without turning",
-		expression: "gap = s − s₀;   s₀: the same release in a room that does not turn, under the uniform level g = Ω² R",
+		expression:
+			"along the floor s − s₀, along the axis s_z − s_z₀;   s₀, s_z₀: the same release in a room that does not turn, under the uniform level g = Ω² R",
 		terms: [
 			{ symbol: "s", meaning: "offset of the landing from the point below the release", unit: "m" },
 			{ symbol: "s₀", meaning: "offset of the landing without turning", unit: "m" },
+			{ symbol: "s_z", meaning: "axial offset of the landing from the release", unit: "m" },
+			{ symbol: "s_z₀", meaning: "axial offset of the landing without turning", unit: "m" },
 			{ symbol: "g", meaning: "uniform level, that of the floor", unit: "m/s²" },
 		],
 		source: "Uniform field, OpenStax University Physics vol. 1, §4.3; the same air and the same floor",

@@ -1,16 +1,27 @@
 import fc from "fast-check";
 import { describe, expect, it } from "vitest";
-import { eventsOfDrop } from "../../src/activity/drop.ts";
+import { END, eventsOfDrop, GAP } from "../../src/activity/drop.ts";
 import { FORMULAS } from "../../src/activity/formula.ts";
 import { SUMMARY_KEYS } from "../../src/activity/keys.ts";
 import type { Derivation } from "../../src/activity/result.ts";
 import { assess } from "../../src/assess.ts";
+import { RELATIVE_TOLERANCE } from "../../src/flight/drag-path.ts";
 import { toss } from "../support/arbitrary.ts";
 import { flown } from "../support/flown.ts";
 import { deckFile, dropFile, type LayoutParts, layoutOf } from "../support/layout-of.ts";
 
 const KEYS = Object.keys(SUMMARY_KEYS.drop);
 const nine = (x: number): number => Number(x.toPrecision(9));
+
+/** The inputs are the formula's terms in their order, with its units; none where the flight needed none. */
+function follows(derivation: Derivation, key: string): void {
+	const { terms } = FORMULAS[derivation.formula];
+	expect(
+		derivation.inputs.map((i) => [i.symbol, i.unit]),
+		key,
+	).toEqual(terms.map((t) => [t.symbol, t.unit]));
+	for (const { value } of derivation.inputs) if (typeof value === "number") expect(Number.isFinite(value), key).toBe(true);
+}
 
 describe("the summary of a drop", () => {
 	it("has every key of the contract in its order; every number written to 9 figures, finite, with its derivation; every null with a reason", () => {
@@ -38,16 +49,6 @@ describe("the summary of a drop", () => {
 		);
 	});
 
-	/** The inputs are the formula's terms in their order, with its units; none where the flight needed none. */
-	function follows(derivation: Derivation, key: string): void {
-		const { terms } = FORMULAS[derivation.formula];
-		expect(
-			derivation.inputs.map((i) => [i.symbol, i.unit]),
-			key,
-		).toEqual(terms.map((t) => [t.symbol, t.unit]));
-		for (const { value } of derivation.inputs) if (typeof value === "number") expect(Number.isFinite(value), key).toBe(true);
-	}
-
 	it("can be reckoned again from its derivations", () => {
 		fc.assert(
 			fc.property(toss({ floor: "curved", atRest: true }), ({ parts, file }) => {
@@ -72,6 +73,90 @@ describe("the summary of a drop", () => {
 			}),
 			{ seed: 82, numRuns: 100 },
 		);
+	});
+});
+
+describe("a derivation stands beside the summary", () => {
+	const derived = (parts: LayoutParts, file: ReturnType<typeof dropFile>) =>
+		assess(layoutOf({ ...parts, activities: [file] }), []).cases[0]!;
+	const put = (d: Derivation): Record<string, number> => Object.fromEntries(d.inputs.map((i) => [i.symbol, Number(i.value)]));
+
+	it("of the gap, with its axial part", () => {
+		const object = { mass_kg: 0.2, diameter_m: 0.12, drag_coefficient: 1 };
+		const release = { speed_mps: 3, heading_deg: 40, elevation_deg: 50 };
+		for (const drag of [false, true]) {
+			const { derivations, motion, summary } = derived({}, dropFile({ object, release, drag }));
+			const { gap } = motion!;
+			const v = put(derivations[GAP]!);
+			follows(derivations[GAP]!, GAP);
+			expect(v.s).toBe(summary.landing_prograde_m);
+			expect(v.s_z).toBe(summary.landing_axial_m);
+			expect(v.s! - v["s₀"]!).toBeCloseTo(gap!.prograde, 7);
+			expect(v.s_z! - v["s_z₀"]!).toBeCloseTo(gap!.axial, 7);
+			expect(Math.abs(gap!.axial)).toBeGreaterThan(0.01);
+		}
+	});
+
+	it("of the time, where nothing is struck: that it was followed for", () => {
+		const drain = { id: "drain", kind: "hatch", deck: "lower", angle_deg: 0, axial_m: 0, shape: "circle", diameter_m: 1.5 } as const;
+		const still = derived({ spin: { rate_rpm: 0 } }, dropFile());
+		expect(put(still.derivations[END]!).t).toBe(600);
+		expect(still.derivations[END]!.assumptions.join(" ")).toMatch(/10 turns.*600 s/);
+		const out = derived({ elements: [drain] }, dropFile());
+		expect(put(out.derivations[END]!).t).toBeCloseTo(out.motion!.flight.end, 7);
+		expect(out.derivations[END]!.assumptions.join(" ")).toMatch(/out of the hatch/);
+		for (const c of [still, out]) follows(c.derivations[END]!, END);
+		expect(derived({}, dropFile()).derivations[END]).toBeUndefined();
+	});
+
+	it("and the tolerance it names is the one that is kept", () => {
+		expect(FORMULAS["drag-flight"].source).toContain(`relative tolerance ${RELATIVE_TOLERANCE}`);
+	});
+});
+
+describe("an offset that does not exist says why", () => {
+	const feet = { angle_deg: 0, axial_m: 0, facing_deg: 0 };
+	const thrown = (parts: LayoutParts, from: object, release: object, feet_deg = 0) =>
+		flown(
+			{ spin: { rate_rpm: 0 }, ...parts },
+			dropFile({
+				from: { deck: "lower", angle_deg: 0, axial_m: 0, height_m: 1, ...from },
+				release: { speed_mps: 5, heading_deg: 0, elevation_deg: 0, ...release },
+				feet: { ...feet, angle_deg: feet_deg },
+			}),
+		);
+
+	it("on a side bulkhead and on an end bulkhead", () => {
+		const wedge = deckFile({ from_deg: -4, to_deg: 4 });
+		const side = thrown({ decks: [wedge] }, { height_m: 2 }, {});
+		expect(side.summary.struck).toBe("side-high:lower");
+		for (const key of ["landing_prograde_m", "landing_from_feet_prograde_m"])
+			expect(side.reasons[key]).toBe("a side bulkhead has no prograde direction of its own");
+		expect(side.summary.landing_axial_m).toBe(0);
+		const end = thrown({ decks: [wedge] }, {}, { heading_deg: 90 });
+		expect(end.summary.struck).toBe("end-high:lower");
+		for (const key of ["landing_axial_m", "landing_from_feet_axial_m"])
+			expect(end.reasons[key]).toBe("an end bulkhead has no axial direction of its own");
+		expect(end.summary.landing_prograde_m).toBe(0);
+	});
+
+	it("where straight down from the release the struck deck is not", () => {
+		/** From 7 m along a flat deck up through a wide hatch in a deck of radius 6 m, and on to its floor. */
+		const parts: LayoutParts = {
+			decks: [
+				deckFile({ floor: "flat", radius_m: 10, from_deg: -50, to_deg: 50 }),
+				deckFile({ id: "inner", radius_m: 6, headroom_m: 2.4 }),
+			],
+			elements: [{ id: "h", kind: "hatch", deck: "inner", angle_deg: 0, axial_m: 0, shape: "rectangle", along_m: 5, across_m: 2 }],
+		};
+		const away = (7 / 10) * (180 / Math.PI);
+		const release = { heading_deg: 180, elevation_deg: (Math.atan(2.3 / 4) * 180) / Math.PI };
+		const found = (feet_deg: number) => thrown(parts, { angle_deg: (Math.atan(7 / 10) * 180) / Math.PI, height_m: 0.1 }, release, feet_deg);
+		const { summary, reasons } = found(away);
+		expect([summary.struck, summary.passed]).toEqual(["deck:inner", ["h"]]);
+		expect(reasons.landing_prograde_m).toBe('the line straight down from the release does not meet deck "inner"');
+		expect(reasons.landing_from_feet_prograde_m).toBe('the line straight down from the feet does not meet deck "inner"');
+		expect(found(0).reasons.landing_from_feet_prograde_m).toBeUndefined();
 	});
 });
 

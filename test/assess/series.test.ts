@@ -12,9 +12,7 @@ const DEG = 180 / Math.PI;
 const AIR = (70_300 * (0.265 * 0.0319988 + 0.735 * 0.0280134)) / (8.314462618 * 294.15);
 
 /** Single numbers that are never null. */
-const SIZES = "t_s level_g lateral_mps2 eyes_degps stars_degps ear_degps illusion_degps disagree_degps radius_m angle_deg axial_m".split(
-	" ",
-);
+const SIZES = "t_s level_g lateral_mps2 eyes_degps ear_degps illusion_degps disagree_degps radius_m angle_deg axial_m".split(" ");
 const TILTS = ["tilt_prograde_deg", "tilt_axial_deg", "head_tilt_deg"] as const;
 const VECTORS = ["c_mps2", "k_mps2", "e_mps2", "a_mps2"] as const;
 
@@ -63,7 +61,7 @@ const spinOf = ({ spin = { rate_rpm: 3.6 } }: LayoutParts): Throw["spin"] =>
 
 /** Keys, lengths, steps and finiteness that the contract asks of every series. */
 function sound(series: DropSeries, duration: number): void {
-	expect(Object.keys(series).sort()).toEqual([...SIZES, ...TILTS, ...VECTORS, "events"].sort());
+	expect(Object.keys(series).sort()).toEqual([...SIZES, ...TILTS, ...VECTORS, "stars_degps", "events"].sort());
 	const step = Math.max(1 / 120, duration / 3999);
 	const n = Math.floor(duration / step + 1e-6) + 1;
 	expect(n).toBeLessThanOrEqual(4000);
@@ -75,8 +73,9 @@ function sound(series: DropSeries, duration: number): void {
 	};
 	for (const key of SIZES) each(key, Number.isFinite);
 	for (const key of TILTS) each(key, (sample, i) => (sample === null ? series.level_g[i] === 0 : Number.isFinite(sample)));
+	each("stars_degps", (sample) => sample === null || (Number.isFinite(sample) && (sample as number) >= 0));
 	for (const key of VECTORS) each(key, (sample) => Array.isArray(sample) && sample.length === 3 && sample.every(Number.isFinite));
-	for (const key of ["level_g", "lateral_mps2", "eyes_degps", "stars_degps", "ear_degps", "illusion_degps", "disagree_degps"] as const)
+	for (const key of ["level_g", "lateral_mps2", "eyes_degps", "ear_degps", "illusion_degps", "disagree_degps"] as const)
 		if (series[key].some((size) => size < 0)) odd.push(`${key} is a size and goes below 0`);
 	expect(odd).toEqual([]);
 	near(
@@ -235,15 +234,64 @@ test("stars turn by the spin and the head where a window is in view, and are not
 	const seen = entryOf({ elements: [pane] }, drop).series;
 	expect(seen.stars_degps[0]).toBeCloseTo(21.6, 6);
 	expect(Math.max(...seen.eyes_degps)).toBeGreaterThan(1);
-	const viewed = seen.stars_degps.flatMap((stars, i) => (stars > 0 ? [[stars, seen.eyes_degps[i] as number] as const] : []));
+	const viewed = seen.stars_degps.flatMap((stars, i) => (stars !== null ? [[stars, seen.eyes_degps[i] as number] as const] : []));
 	expect(viewed.length).toBeGreaterThan(10);
 	for (const [stars, eyes] of viewed) {
 		expect(stars).toBeLessThanOrEqual(21.6 + eyes + 1e-6);
 		expect(stars).toBeGreaterThanOrEqual(Math.abs(21.6 - eyes) - 1e-6);
 	}
-	expect(entryOf({}, drop).series.stars_degps.every((stars) => stars === 0)).toBe(true);
-	const behind = entryOf({ elements: [{ ...pane, angle_deg: -8 }] }, drop).series;
-	expect(behind.stars_degps.every((stars) => stars === 0)).toBe(true);
+	for (const elements of [[], [{ ...pane, angle_deg: -8 }]]) {
+		const { series, reasons } = entryOf({ elements }, drop);
+		expect(series.stars_degps.every((stars) => stars === null)).toBe(true);
+		expect(reasons.stars_degps).toMatch(/no window is in view/);
+	}
+	const { series, reasons } = entryOf({ spin: { rate_rpm: 0 }, elements: [pane] }, drop);
+	expect(series.stars_degps[0]).toBe(0);
+	expect(reasons.stars_degps === undefined).toBe(!series.stars_degps.includes(null));
+});
+
+test("level, tilt and lateral push are those below the release where the layout puts nobody's feet anywhere", () => {
+	for (const [height, angle] of [
+		[1.2, 66],
+		[0.3, 47],
+	] as const) {
+		const { series } = entryOf({ decks: [flat] }, { from: from(height, angle) });
+		const along = 24 * Math.tan((angle - 60) / DEG);
+		const rate = 0.12 * Math.PI;
+		near(
+			[series.level_g[0]!, series.lateral_mps2[0]!],
+			[(rate * rate * Math.hypot(24, along)) / G0, rate * rate * Math.abs(along)],
+			1e-7,
+			"level",
+		);
+		near([series.tilt_prograde_deg[0]!, series.tilt_axial_deg[0]!], [angle - 60, 0], 1e-6, "tilt");
+	}
+});
+
+test("beyond a hatch the object's parts are along the axes of the deck it has come to", () => {
+	const parts: LayoutParts = {
+		decks: [deckFile({ floor: "flat", radius_m: 34, from_deg: -20, to_deg: 20 }), deckFile({ id: "upper", radius_m: 31, headroom_m: 2.3 })],
+		elements: [{ ...well, angle_deg: 5 }],
+	};
+	const { series } = entryOf(parts, { from: { deck: "upper", angle_deg: 5.3, axial_m: 0.4, height_m: 1 } });
+	const [, passes] = series.events;
+	expect(passes!.name).toBe("passes well");
+	const rate = 0.12 * Math.PI;
+	let beyond = 0;
+	for (const [i, t] of series.t_s.entries()) {
+		const r = series.radius_m[i]!;
+		const angle = series.angle_deg[i]! / DEG;
+		const after = t >= passes!.t_s;
+		if (after) beyond++;
+		near(
+			series.c_mps2[i]!,
+			after ? [rate * rate * r * Math.sin(angle), -rate * rate * r * Math.cos(angle), 0] : [0, -rate * rate * r, 0],
+			1e-7,
+			`c at ${t} s`,
+		);
+	}
+	expect(beyond).toBeGreaterThan(5);
+	expect(series.t_s.length - beyond).toBeGreaterThan(5);
 });
 
 test("600 s without a strike: 4000 samples within 4 s of processor time", () => {

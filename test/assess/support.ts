@@ -21,7 +21,7 @@ export interface DropSeries {
 	readonly a_mps2: Vectors;
 	readonly lateral_mps2: Sizes;
 	readonly eyes_degps: Sizes;
-	readonly stars_degps: Sizes;
+	readonly stars_degps: readonly (number | null)[];
 	readonly ear_degps: Sizes;
 	readonly illusion_degps: Sizes;
 	readonly disagree_degps: Sizes;

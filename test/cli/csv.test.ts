@@ -40,7 +40,7 @@ describe("the demo", () => {
 			);
 			expect(head).toEqual([...columns.map(([name]) => name), "event"]);
 			expect(rows.length).toBe(series.t_s?.length);
-			for (const [i, [, values]] of columns.entries()) expect(rows.map((row) => Number(row[i]))).toEqual(values);
+			for (const [i, [, values]] of columns.entries()) expect(rows.map((row) => (row[i] === "" ? null : Number(row[i])))).toEqual(values);
 			const told = rows.flatMap((row, i) => (row.at(-1) === "" ? [] : [[i, row.at(-1)]]));
 			const [release, end] = events as { t_s: number; name: string }[];
 			expect(told).toEqual([
@@ -61,11 +61,11 @@ describe("the demo", () => {
 	});
 });
 
-test("no value where a direction does not exist", async () => {
+test("no value where a direction does not exist and where no stars are to be seen", async () => {
 	expect((await assessed(ruled({ spin: { rate_rpm: 0 } }), "--csv", join(folder, "still"))).status).toBe(3);
 	const [head = [], ...rows] = read("still/drop.one.nominal.csv");
 	const empty = head.filter((_, i) => rows.every((row) => row[i] === ""));
-	expect(empty).toEqual(["tilt_prograde_deg", "tilt_axial_deg", "head_tilt_deg"]);
+	expect(empty).toEqual(["tilt_prograde_deg", "tilt_axial_deg", "head_tilt_deg", "stars_degps"]);
 	expect(rows.every((row) => row.length === head.length)).toBe(true);
 });
 

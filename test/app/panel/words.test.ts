@@ -1,5 +1,4 @@
 import { describe, expect, test } from "vitest";
-import { printer } from "../../../app/store/print.ts";
 import {
 	findingWords,
 	fromFeetWords,
@@ -13,6 +12,8 @@ import {
 	standing,
 } from "../../../app/panel/words.ts";
 import { type AssessedCase, assessLayout, type LayoutFile } from "../../../app/store/core.ts";
+import { printer } from "../../../app/store/print.ts";
+import { GAP } from "../../../src/activity/drop.ts";
 import { findingOf } from "../../support/finding-of.ts";
 import { deckFile, dropFile, layoutOf } from "../../support/layout-of.ts";
 
@@ -36,12 +37,13 @@ describe("the headline", () => {
 	test("a toss is held against the landing without turning", () => {
 		const h = headline(dropped({ release: { speed_mps: 2, heading_deg: 0, elevation_deg: 30 } }), si);
 		expect(h?.tail).toMatch(/^(with|against) spin of where it would land without turning$/);
-		expect(h?.key).toBeNull();
+		expect(h?.key).toBe(GAP);
 		expect(h?.also).toMatch(/with spin of your hand\.$/);
 	});
 	test("nothing turns: nothing is struck", () => {
 		const c = only(layoutOf({ spin: { rate_rpm: 0 }, activities: [dropFile()] }));
 		expect(plain(headlineWords(c, si))).toBe("Has struck nothing after 600 s of flight.");
+		expect(c.derivations[headline(c, si)?.key ?? ""]?.formula).toBe("free-flight");
 		expect(standing(c)).toEqual({ level: 0, tilt: 0 });
 	});
 });
