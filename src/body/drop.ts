@@ -1,3 +1,4 @@
+import { minimumJerk } from "../frame/spin.ts";
 import { radFromDeg } from "../quantity/convert.ts";
 import type { Floor } from "./floor.ts";
 import { chestBow, gazePivot, lookDirection, turnEyes, turnHead } from "./gaze.ts";
@@ -50,11 +51,8 @@ const LAG_SAMPLES = 8;
 /** How far back and down the hand goes once it is empty, and how much further from over the head, × stature. */
 const SINK = { back: 0.02, down: 0.05, more: 0.1 } as const;
 
-/** Minimum jerk from 0 to 1 (Flash & Hogan 1985), held beyond its ends. */
-export function minimumJerk(tau: number): number {
-	const x = Math.min(1, Math.max(0, tau));
-	return x * x * x * (10 + x * (6 * x - 15));
-}
+/** Minimum jerk from 0 to 1, held beyond its ends. */
+const smooth = (tau: number): number => minimumJerk.share(Math.min(1, Math.max(0, tau)));
 
 const target = new Float64Array(3);
 const sample = new Float64Array(3);
@@ -103,7 +101,7 @@ export function createDropper(drop: Drop): Dropper {
 	const follow = Math.min(0.05, (0.07 * stature) / Math.max(Math.hypot(...velocity), 1e-9));
 	for (let k = 0; k < 3; k++) target[k] = (target[k] as number) + follow * (velocity[k] as number);
 	target[0] = (target[0] as number) - SINK.back * stature;
-	target[1] = (target[1] as number) - (SINK.down + SINK.more * minimumJerk((at[1] / stature - 0.75) / 0.35)) * stature;
+	target[1] = (target[1] as number) - (SINK.down + SINK.more * smooth((at[1] / stature - 0.75) / 0.35)) * stature;
 	solveArm(eased, side, target, grip, palmDirection(at[1] / stature, side, velocity));
 	return { side, diameter, track, held, eased, pivot, bow: chestBow(direction) };
 }
@@ -112,11 +110,11 @@ export function createDropper(drop: Drop): Dropper {
 export function dropPose(person: Dropper, t: number, out: Pose): void {
 	const { held, eased, side, track, pivot } = person;
 	copyPose(held, out);
-	const ease = minimumJerk(t / EASE);
+	const ease = smooth(t / EASE);
 	for (let i = 3 * limb(side, "upperArm"); i < 3 * limb(side, "fingers"); i++)
 		out.angle[i] = (held.angle[i] as number) + ease * ((eased.angle[i] as number) - (held.angle[i] as number));
-	setHand(out, side, person.diameter, 1 - minimumJerk(t / OPEN));
-	const lowest = HELD_GAZE + (FREE_GAZE - HELD_GAZE) * minimumJerk(t / FREE);
+	setHand(out, side, person.diameter, 1 - smooth(t / OPEN));
+	const lowest = HELD_GAZE + (FREE_GAZE - HELD_GAZE) * smooth(t / FREE);
 	pursued(track, t, HEAD_LAG, target);
 	lookDirection(pivot, target, lowest, direction);
 	const thorax = 3 * trunk("thorax");

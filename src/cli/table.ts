@@ -39,7 +39,7 @@ export function assessmentTable(assessed: Assessed, colour: boolean): string {
 		const list = orderFindings(assessed.findings.filter((f) => f.force === force));
 		if (list.length === 0) continue;
 		out.push(bold(`Findings, ${force}`));
-		for (const f of list) out.push(`  ${findingLine(f)}`);
+		for (const f of list) out.push(`  ${plain(findingLine(f))}`);
 		out.push("");
 	}
 	out.push("Results support a review. They do not replace the project's human-rating authority, local codes or licensed practice.", "");
@@ -50,9 +50,8 @@ function findingLine(f: Finding): string {
 	const who = [f.subject, f.crew, f.phase].filter((s) => s !== null).join(", ");
 	const limit = f.quantity === "" ? "" : `${f.comparison} ${figures(f.limit)} ${f.unit}`.trim();
 	const value = f.value === null ? "" : `${f.quantity} ${figures(f.value)} ${f.unit}`.trim();
-	const title = plain(f.title);
 	const held = f.reason
-		? `${title}: ${f.reason}`
-		: `${title}: ${value}, ${limit}, margin ${f.margin === null ? "none" : figures(f.margin)}`;
+		? `${f.title}: ${f.reason}`
+		: `${f.title}: ${value}, ${limit}, margin ${f.margin === null ? "none" : figures(f.margin)}`;
 	return `${f.result.padEnd(12)} ${who.padEnd(28)} ${held}${f.basis === "unverified" && f.quantity !== "" ? " [limit unverified, confirm]" : ""}`;
 }

@@ -1,6 +1,6 @@
 import { describe, expect, it } from "vitest";
 import { soleCorners, supportMargin } from "../../src/body/balance.ts";
-import { createDropper, dropPose, minimumJerk, poseFor } from "../../src/body/drop.ts";
+import { createDropper, dropPose, poseFor } from "../../src/body/drop.ts";
 import { eyeMidpoint, GAZE } from "../../src/body/gaze.ts";
 import { copyPose, createPose, type Pose } from "../../src/body/pose.ts";
 import { defaultFeet, type Hand, palmPoint } from "../../src/body/reach.ts";
@@ -124,10 +124,5 @@ describe("a drop", () => {
 		dropPose(person, 5, pose);
 		dropPose(person, 0.31, pose);
 		expect(pose.world).toEqual(then);
-	});
-
-	it("follows minimum jerk: ends, middle, peak rate 1.875", () => {
-		expect([minimumJerk(-1), minimumJerk(0), minimumJerk(0.5), minimumJerk(1), minimumJerk(9)]).toEqual([0, 0, 0.5, 1, 1]);
-		expect((minimumJerk(0.5 + 1e-5) - minimumJerk(0.5 - 1e-5)) / 2e-5).toBeCloseTo(1.875, 6);
 	});
 });

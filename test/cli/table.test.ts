@@ -76,9 +76,15 @@ test("assumptions that the layout replaces are listed, and only those", async ()
 });
 
 test("what a layout says does not command the terminal", async () => {
-	const { stdout } = await assessed({ ...ruled({ own: [rule({ title: "two\nlines" })] }), title: "\u001b[2Jgone\u0007" });
+	const { stdout } = await assessed({
+		...ruled({ own: [rule({ title: "two\nlines" })] }),
+		title: "\u001b[2Jgone\u0007",
+	});
 	expect(stdout.split("\n")[0]).toBe("\uFFFD[2Jgone\uFFFD");
 	expect(stdout).toContain("two\uFFFDlines: impact_energy_J");
+	const { stdout: other } = await assessed(ruled({ own: [rule({ unit: "\u001b[31mJ" })] }));
+	expect(other.replaceAll("\n", "")).not.toMatch(/\p{Cc}/u);
+	expect(other).toContain("the limit is in \uFFFD[31mJ");
 });
 
 test("small, large and negative numbers keep three figures and their sign", async () => {
