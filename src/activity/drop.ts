@@ -128,7 +128,7 @@ export const GAP = "gap";
 /** Likewise that of the time at which a flight that struck nothing ends. */
 export const END = "end_s";
 
-const LONGEST = "10 turns at the rate of the release, or 600 s where that is longer";
+const LONGEST = "10 turns at the rate of the release, at least 600 s and at most 10⁷ s";
 const NOTHING_STRUCK = "nothing was struck";
 const LEFT = "it left through a hatch into no deck's volume";
 const NO_AXIAL = "an end bulkhead has no axial direction of its own";
