@@ -3,8 +3,8 @@ import type { AssessedCase, LayoutFile } from "../store/core.ts";
 import { useDocument } from "../store/document.ts";
 import { dropTrace } from "../store/motion.ts";
 import { lastMoment, selectActivity, selectCase, useSelectedCase, worstCase } from "../store/navigate.ts";
-import { phaseRate } from "./levels.ts";
 import { type Printer, usePrinter } from "../store/print.ts";
+import { phaseRate } from "./levels.ts";
 import { detailOf, nameOf } from "./words.ts";
 
 /** A card for each activity that is built, with its motion in small; the others are named, and that is all. */

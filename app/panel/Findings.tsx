@@ -4,8 +4,8 @@ import type { Finding, LayoutFile } from "../store/core.ts";
 import { useDocument } from "../store/document.ts";
 import { type FindingGroup, findingKey, grouped } from "../store/findings.ts";
 import { selectFinding } from "../store/navigate.ts";
-import { useSession } from "../store/session.ts";
 import { type Printer, usePrinter } from "../store/print.ts";
+import { useSession } from "../store/session.ts";
 import { limitWords, quantityWords, RESULT_WORDS, sourceWords, subjectWords } from "./words.ts";
 
 const FORCE_WORDS: Readonly<Record<Finding["force"], string>> = { shall: "Shall", should: "Should", information: "Information" };

@@ -1,11 +1,11 @@
 import { useEffect } from "react";
 import { commandNamed } from "../command/all.ts";
 import { isDirty, useDocument } from "../store/document.ts";
+import { usePrinter } from "../store/print.ts";
 import { useSession } from "../store/session.ts";
 import { CommandButton } from "./CommandButton.tsx";
 import { deckLevels, phaseRate } from "./levels.ts";
 import { Menu } from "./Menu.tsx";
-import { usePrinter } from "../store/print.ts";
 import { ViewSwitch } from "./ViewSwitch.tsx";
 
 /** Title, spin rate and level of each deck in the phase on the stage; view, edits and the menu. */

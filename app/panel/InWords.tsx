@@ -5,9 +5,9 @@ import { useDocument } from "../store/document.ts";
 import { byMargin } from "../store/findings.ts";
 import { dropTrace } from "../store/motion.ts";
 import { useSelectedCase } from "../store/navigate.ts";
+import { type Printer, usePrinter } from "../store/print.ts";
 import { useSession } from "../store/session.ts";
 import { onTime } from "../store/transient.ts";
-import { type Printer, usePrinter } from "../store/print.ts";
 import { findingWords, headlineWords, inWords, nameOf, withOrAgainst } from "./words.ts";
 
 /** The picture's facts as text, for everyone; the sentence about this instant follows when the clock has come to rest. */

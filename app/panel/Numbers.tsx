@@ -1,9 +1,9 @@
 import { useId } from "react";
 import { SUMMARY_KEYS } from "../../src/activity/keys.ts";
 import type { AssessedCase } from "../store/core.ts";
+import type { Printer } from "../store/print.ts";
 import { useSession } from "../store/session.ts";
 import { DerivationPanel } from "./DerivationPanel.tsx";
-import type { Printer } from "../store/print.ts";
 import { nameOf, struckWords } from "./words.ts";
 
 /** What summary keys are called on screen, in the order shown: those always in sight, and those on request. */

@@ -3,10 +3,10 @@ import type { AssessedCase, Finding } from "../store/core.ts";
 import { useDocument } from "../store/document.ts";
 import { findingKey, weightiest } from "../store/findings.ts";
 import { useSelectedCase, worstCase } from "../store/navigate.ts";
+import { type Printer, usePrinter } from "../store/print.ts";
 import { useSession } from "../store/session.ts";
 import { DerivationPanel } from "./DerivationPanel.tsx";
 import { Numbers } from "./Numbers.tsx";
-import { type Printer, usePrinter } from "../store/print.ts";
 import { Traces } from "./Traces.tsx";
 import { consequence, headline, limitWords, nameOf, quantityWords, RESULT_WORDS } from "./words.ts";
 

@@ -3,8 +3,8 @@ import { sampleAt, type Trace, trace } from "../../src/drawing/trace.ts";
 import { printNumber, withUnit } from "../../src/quantity/print-quantity.ts";
 import type { AssessedCase } from "../store/core.ts";
 import { dropTrace } from "../store/motion.ts";
-import { onTime, setTime, transient } from "../store/transient.ts";
 import type { Printer } from "../store/print.ts";
+import { onTime, setTime, transient } from "../store/transient.ts";
 import { useWidth } from "./useWidth.ts";
 
 const INSET = { top: 8, right: 10, bottom: 4, left: 46 };

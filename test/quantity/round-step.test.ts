@@ -11,4 +11,6 @@ test.each([
 	[100, 100],
 ])("a step of about %d is %d", (about, step) => expect(roundStep(about)).toBe(step));
 
-test.each([0, -1, Number.NaN, Number.POSITIVE_INFINITY])("%d is refused", (about) => expect(() => roundStep(about)).toThrow(`got ${about}`));
+test.each([0, -1, Number.NaN, Number.POSITIVE_INFINITY])("%d is refused", (about) =>
+	expect(() => roundStep(about)).toThrow(`got ${about}`),
+);

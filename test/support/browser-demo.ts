@@ -1,4 +1,6 @@
 import { readdirSync, readFileSync } from "node:fs";
+import { join } from "node:path";
+import { root } from "../../.ci/house.mjs";
 import { type AssessedCase, assess } from "../../src/assess.ts";
 import type { CriterionRow } from "../../src/criteria/row.ts";
 import type { Deck } from "../../src/layout/habitat.ts";
@@ -7,7 +9,7 @@ import { directionToStage, type StageFrame, stageFrame, toStage } from "../../sr
 import { ring } from "../../src/vector/vec3.ts";
 import type { Vec } from "./browser-stage.ts";
 
-const read = (path: string): string => readFileSync(new URL(`../../assets/${path}`, import.meta.url), "utf8");
+const read = (path: string): string => readFileSync(join(root, "assets", path), "utf8");
 
 export const demoText = read("layout/larkspur.layout.json");
 
@@ -15,7 +17,7 @@ export const demoText = read("layout/larkspur.layout.json");
 export function assessDemo() {
 	const parsed = parseLayout(demoText);
 	if (!parsed.ok) throw new Error(`the demo is refused: ${JSON.stringify(parsed.problems)}`);
-	const rows = readdirSync(new URL("../../assets/criteria/", import.meta.url))
+	const rows = readdirSync(join(root, "assets/criteria"))
 		.filter((name) => name.endsWith(".json"))
 		.flatMap((name) => JSON.parse(read(`criteria/${name}`)) as CriterionRow[]);
 	return assess(parsed.layout, rows);

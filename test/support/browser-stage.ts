@@ -106,11 +106,6 @@ export const readStage = (page: Page): Promise<StageState> =>
 		};
 	});
 
-export async function goTo(page: Page, time: number): Promise<void> {
-	await page.evaluate((t) => window.stageProbe?.setTime(t), time);
-	await atRest(page);
-}
-
 export async function chooseView(page: Page, view: "Eyepoint" | "External"): Promise<void> {
 	await page.getByRole("radio", { name: view }).check({ force: true });
 	await atRest(page);

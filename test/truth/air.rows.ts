@@ -33,7 +33,7 @@ export function rows(): TruthRow[] {
 				tolerance: 1e-8,
 				kind: "relative",
 				unit: "kg/m³",
-				source: "mathjs 15.2.0 units and gas constant, in agreement with the reference sheet §7",
+				source: "mathjs 15.2.0 units and gas constant, in agreement with a published table",
 				flag: "C",
 			};
 		}),

@@ -40,7 +40,7 @@ function confirmed(printed: number, differenced: number, halfDigit: number): num
 	return printed;
 }
 
-const DIFFERENCES = "reference sheet §0 checks 13, 14 and §5; second differences of the inertial path give the same digits";
+const DIFFERENCES = "computed from Ω²r and 2Ωv; second differences of the inertial path give the same digits";
 
 export function rows(): TruthRow[] {
 	const walks = [3, -3].flatMap((v) => [[4, 56, v, v > 0 ? 1.2746 : 0.7621] as const, [8, 10, v, v > 0 ? 1.32 : 0.2949] as const]);

@@ -94,7 +94,7 @@ function confirmed(printed: number, integrated: number, halfDigit: number, what:
 	return printed;
 }
 
-const REFERENCE = "reference sheet §0 checks 9–11 and §5 table; odex gives the same digits";
+const REFERENCE = "computed from the involute of the release circle; odex gives the same digits";
 
 function published(): TruthRow[] {
 	return PUBLISHED.flatMap(([radius, height, time, arc]) => {

@@ -47,7 +47,7 @@ export function rows(): TruthRow[] {
 			tolerance: 5e-10,
 			kind: "absolute",
 			unit: "rad/s",
-			source: "reference sheet §0 check 1, 2π/60",
+			source: "2π/60, computed",
 			flag: "C",
 		},
 	];

@@ -82,7 +82,7 @@ describe("the result", () => {
 		const text = textOf(draw(<Result />));
 		expect(text).toMatch(/Lands0\.30 m ?against spin of your hand/);
 		expect(text).toContain("0.11 m in front of your feet and 0.25 m to the right.");
-		expect(text).toContain("Outsideshould");
+		expect(text).toContain("Outsidea limit that should be kept");
 		expect(text).toContain("Opened here:");
 		expect(text).toMatch(/Strikes the Cargo deck at 3\.73 m\/s/);
 	});
