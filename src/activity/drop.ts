@@ -13,8 +13,6 @@ import type { CaseSummary, Derivation } from "./result.ts";
 import { givenStance, type Stance, stanceAtHand } from "./stance.ts";
 import { derive, put, SummaryWriter } from "./summary.ts";
 
-export type { Path } from "../flight/path.ts";
-
 export type DropFile = ActivityOf<"drop">;
 
 /** A drop or toss as computed: what the summary, the series and the picture are drawn from. SI. */
