@@ -54,7 +54,7 @@ export type AnchorName = (typeof ANCHORS)[number];
 
 const AXIS_NAMES = ["prograde", "up", "axial"] as const;
 /** Of the instruments, CSS px. */
-const AXIS = { width: 144, height: 100, arm: 29, margin: 14, small: { width: 112, height: 84, arm: 22 } } as const;
+const AXIS = { shift: 12, width: 144, height: 100, arm: 29, margin: 14, small: { width: 112, height: 84, arm: 22 } } as const;
 const ROSE = { width: 184, height: 212, arm: 50, margin: 14 } as const;
 /** Of the scale bar beside the plumb in External. */
 const BAR = { beside: 92, above: 14 } as const;
@@ -299,9 +299,9 @@ export class DropPicture {
 		const axisX = AXIS.margin + cue.width / 2;
 		const axisY = AXIS.margin + cue.height / 2;
 		this.axisPanel.set(camera, width, height, axisX, axisY, cue.width / AXIS.width, cue.height / AXIS.height);
-		this.axes.set(camera, width, height, axisX, axisY + 4, cue.arm);
+		this.axes.set(camera, width, height, axisX - AXIS.shift, axisY + 4, cue.arm);
 		anchors.axes.visible = true;
-		hudPoint(camera, width, height, axisX, axisY + 4, anchors.axes.point);
+		hudPoint(camera, width, height, axisX - AXIS.shift, axisY + 4, anchors.axes.point);
 		for (let i = 0; i < 3; i++) {
 			const anchor = anchors[AXIS_NAMES[i] as "prograde"];
 			anchor.visible = true;
