@@ -1,4 +1,4 @@
-import { createRoot, extend, type ReconcilerRoot, type RootState } from "@react-three/fiber";
+import { createRoot, extend, flushSync, type ReconcilerRoot, type RootState } from "@react-three/fiber";
 import { Group, PerspectiveCamera } from "three";
 import type { Stars } from "../../src/shape/drawable.ts";
 import type { DropPicture } from "../../src/shape/drop-picture.ts";
@@ -8,6 +8,7 @@ import type { Painter } from "./painter.ts";
 import { Sky } from "./Sky.tsx";
 import { Still } from "./Still.tsx";
 import { Viewpoint } from "./Viewpoint.tsx";
+import { freeSpent } from "./wrap.ts";
 
 extend({ Group });
 
@@ -46,16 +47,19 @@ export async function createGlPainter(canvas: HTMLCanvasElement): Promise<Painte
 			if (picture !== shown) ready = false;
 			shown = picture;
 			under = stars;
-			store = root.render(
-				<>
-					<Lights />
-					<Viewpoint picture={picture} camera={camera} />
-					<Sky picture={picture} stars={stars} />
-					<Still picture={picture} />
-					<Moving parts={picture.figure.parts} from={2000} />
-					<Moving parts={picture.others} from={3000} onReady={onReady} />
-				</>,
-			);
+			// At once, so that this very frame can paint it.
+			flushSync(() => {
+				store = root.render(
+					<>
+						<Lights />
+						<Viewpoint picture={picture} camera={camera} />
+						<Sky picture={picture} stars={stars} />
+						<Still picture={picture} />
+						<Moving parts={picture.figure.parts} from={2000} />
+						<Moving parts={picture.others} from={3000} onReady={onReady} />
+					</>,
+				);
+			});
 		},
 		paint(width, height, scale) {
 			const state = store?.getState();
@@ -63,8 +67,12 @@ export async function createGlPainter(canvas: HTMLCanvasElement): Promise<Painte
 			if (state.size.width !== width || state.size.height !== height) state.setSize(width, height);
 			if (state.viewport.dpr !== scale) state.setDpr(scale);
 			state.advance(performance.now(), true);
+			freeSpent();
 			return true;
 		},
-		dispose: () => root.unmount(),
+		dispose() {
+			root.unmount();
+			freeSpent();
+		},
 	};
 }

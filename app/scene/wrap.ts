@@ -28,11 +28,21 @@ export function wrap(drawable: Triangles | WideLines, place: number): Object3D {
 	return drawable.kind === "triangles" ? wrapTriangles(drawable, place) : wrapLines(drawable, place);
 }
 
-/** Frees what `wrap` made. */
+const spent: Mesh[] = [];
+
+/** Gives up what `wrap` made. */
 export function dispose(object: Object3D): void {
 	if (!(object instanceof Mesh)) throw new TypeError(`"${object.name}" is not a wrapped drawable`);
-	object.geometry.dispose();
-	(object.material as Material).dispose();
+	spent.push(object);
+}
+
+/** Frees what was given up; once the next picture is drawn, so that the programs it shares with that are not compiled anew. */
+export function freeSpent(): void {
+	for (const { geometry, material } of spent) {
+		geometry.dispose();
+		(material as Material).dispose();
+	}
+	spent.length = 0;
 }
 
 /** Draws only the first `count` triangles or segments. */
