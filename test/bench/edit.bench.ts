@@ -19,13 +19,19 @@ const edit = (page: Page, key: "ArrowUp" | "ArrowDown"): Promise<{ numbers: numb
 		drawn();
 		const before = { numbers: numbersNow(), picture: probe.picture(), frames: probe.conductor.frames };
 		const begin = performance.now();
+		const numbers = new Promise<number>((resolve) => {
+			const seen = new MutationObserver(() => {
+				if (numbersNow() === before.numbers) return;
+				seen.disconnect();
+				resolve(performance.now() - begin);
+			});
+			seen.observe(document.body, { subtree: true, childList: true, characterData: true });
+		});
 		field.dispatchEvent(new KeyboardEvent("keydown", { key: pressed, bubbles: true, cancelable: true }));
-		while (numbersNow() === before.numbers) await new Promise((resolve) => setTimeout(resolve));
-		const numbers = performance.now() - begin;
 		while (probe.conductor.frames === before.frames || probe.picture() === before.picture)
 			await new Promise((resolve) => requestAnimationFrame(resolve));
 		drawn();
-		return { numbers, picture: performance.now() - begin };
+		return { picture: performance.now() - begin, numbers: await numbers };
 	}, key);
 
 type Measurement = Record<"webgl" | "raster", { numbers: number[]; picture: number[] }> & { bare: number[] };
