@@ -1,5 +1,5 @@
 import { expect, test } from "vitest";
-import { keeps, median } from "./bench.ts";
+import { keeps, median, undisturbed } from "./bench.ts";
 
 test.each([
 	[2.5, "≤ 2.5 ×", true],
@@ -19,4 +19,8 @@ test("a goal without a number is no goal", () => {
 
 test("the median is the middle one", () => {
 	expect([median([3, 1, 2]), median([4, 1, 3, 2]), median([])]).toEqual([2, 3, Number.NaN]);
+});
+
+test("the undisturbed time is the lower quartile", () => {
+	expect([undisturbed([8, 1, 2, 9, 3, 7, 4, 6]), undisturbed([5]), undisturbed([])]).toEqual([3, 5, Number.NaN]);
 });

@@ -23,3 +23,6 @@ export function keeps(measured: number, goal: string): boolean {
 
 /** Middle of the sorted values; of an even number the upper one. */
 export const median = (values: readonly number[]): number => [...values].sort((a, b) => a - b)[values.length >> 1] ?? Number.NaN;
+
+/** Lower quartile: of times that other work on the machine can only lengthen, one that it did not. */
+export const undisturbed = (times: readonly number[]): number => [...times].sort((a, b) => a - b)[times.length >> 2] ?? Number.NaN;
