@@ -39,7 +39,7 @@ const open = async (key: string): Promise<void> => {
 };
 const close = async (): Promise<void> => {
 	await page.keyboard.press("Escape");
-	await until("the dialog closes", async () => (await page.getByRole("dialog").count()) === 0);
+	await until("the dialog is gone", async () => (await page.locator("dialog").count()) === 0);
 };
 
 describe.each([

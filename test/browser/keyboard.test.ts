@@ -110,7 +110,7 @@ describe("on the stage", () => {
 		await until("the caution comes", async () => (await page.getByRole("dialog").count()) === 1);
 		expect(await page.getByRole("dialog").textContent()).toMatch(/dizziness or nausea.*photosensitive epilepsy/s);
 		await page.keyboard.press("Escape");
-		await until("the caution goes", async () => (await page.getByRole("dialog").count()) === 0);
+		await until("the caution goes", async () => (await page.locator("dialog").count()) === 0);
 		expect(await onStage()).toBe(true);
 		expect(await playing()).toBe(false);
 		for (let i = 0; i < 3; i++) await page.keyboard.press("[");
@@ -118,7 +118,7 @@ describe("on the stage", () => {
 		await until("the caution comes again", async () => (await page.getByRole("dialog").count()) === 1);
 		await until("its first button has the focus", async () => (await focused())?.name === "button Play in Eyepoint");
 		await page.keyboard.press("Enter");
-		await until("it plays", playing);
+		await until("it plays", async () => (await page.locator("dialog").count()) === 0 && (await playing()));
 		expect(await onStage()).toBe(true);
 		await page.keyboard.press("Space");
 		expect(await playing()).toBe(false);
@@ -187,7 +187,7 @@ describe("on the stage", () => {
 		);
 		expect(inside).toBe(true);
 		await page.keyboard.press("Escape");
-		await until(`${title} closes`, async () => (await dialog.count()) === 0);
+		await until(`${title} closes`, async () => (await page.locator("dialog").count()) === 0);
 		expect(await onStage()).toBe(true);
 	});
 });
