@@ -59,6 +59,8 @@ const ROSE = { width: 184, height: 212, arm: 50, margin: 14 } as const;
 /** Of the scale bar beside the plumb in External. */
 const BAR = { beside: 92, above: 14 } as const;
 const PLUMB = { width: 104, height: 178, long: 84 } as const;
+/** How steeply the person at the screen may make the eyes look, rad. */
+const STEEPEST = (88 * Math.PI) / 180;
 /** A picture narrower or lower than this has no room for rose and plumb. */
 const ROOM = { width: 560, height: 420 } as const;
 /** Length of the largest C in External, m. */
@@ -201,7 +203,10 @@ export class DropPicture {
 		});
 	}
 
-	/** Along the gaze, with the head's own up: looking down keeps "in front" at the top. What the person at the screen turns comes on top. */
+	/**
+	 * Along the gaze, with the head's own up: looking down keeps "in front" at the top. What the person at the screen
+	 * turns comes on top: up and down as the head nods, never over the vertical, then around the deck's up, so that the horizon stays level.
+	 */
 	private aimEye(look: Look): void {
 		const { camera, figure } = this;
 		const { position, gaze, up } = figure.eye;
@@ -210,13 +215,19 @@ export class DropPicture {
 		aim(camera, gaze[0] as number, gaze[1] as number, gaze[2] as number, up[0] as number, up[1] as number, up[2] as number);
 		if (look.yaw === 0 && look.pitch === 0) return;
 		const b = camera.basis;
-		const c = Math.cos(look.pitch);
-		const right = c * Math.sin(look.yaw);
-		const above = Math.sin(look.pitch);
-		const ahead = c * Math.cos(look.yaw);
-		const d = this.drawn;
-		for (let k = 0; k < 3; k++) d[k] = right * (b[k] as number) + above * (b[3 + k] as number) + ahead * (b[6 + k] as number);
-		aim(camera, d[0] as number, d[1] as number, d[2] as number, b[3] as number, b[4] as number, b[5] as number);
+		const from = Math.asin(Math.max(-1, Math.min(1, b[7] as number)));
+		const pitch = Math.max(Math.min(from, -STEEPEST), Math.min(Math.max(from, STEEPEST), from + look.pitch)) - from;
+		const nod = Math.cos(pitch);
+		const rise = Math.sin(pitch);
+		const ahead = this.drawn;
+		const above = this.pixel;
+		for (let k = 0; k < 3; k++) {
+			ahead[k] = nod * (b[6 + k] as number) + rise * (b[3 + k] as number);
+			above[k] = nod * (b[3 + k] as number) - rise * (b[6 + k] as number);
+		}
+		turnAboutUp(ahead, look.yaw);
+		turnAboutUp(above, look.yaw);
+		aim(camera, ahead[0] as number, ahead[1] as number, ahead[2] as number, above[0] as number, above[1] as number, above[2] as number);
 	}
 
 	private aimExternal(look: Look): void {
@@ -367,4 +378,14 @@ export class DropPicture {
 		if (stage.landing && stage.ghostLanding)
 			for (let k = 0; k < 3; k++) anchors.gap.point[k] = ((stage.landing[k] as number) + (stage.ghostLanding[k] as number)) / 2;
 	}
+}
+
+/** Turns a stage direction to the right about the deck's up, rad. */
+function turnAboutUp(v: Float64Array, right: number): void {
+	const c = Math.cos(right);
+	const s = Math.sin(right);
+	const x = v[0] as number;
+	const z = v[2] as number;
+	v[0] = x * c - z * s;
+	v[2] = x * s + z * c;
 }

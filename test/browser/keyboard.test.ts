@@ -149,6 +149,21 @@ describe("on the stage", () => {
 		expect(home.camera.position).toEqual(first.camera.position);
 	});
 
+	test("turning in Eyepoint keeps the horizon level, however far down the eyes look", async () => {
+		await chooseView(page, "Eyepoint");
+		await press(page, "Home");
+		const level = ({ camera }: Awaited<ReturnType<typeof readStage>>): number => (Math.asin(camera.right[1]) * 180) / Math.PI;
+		const first = await readStage(page);
+		expect(first.camera.forward[1]).toBeLessThan(-0.5);
+		await press(page, "ArrowRight", 18);
+		const aside = await readStage(page);
+		expect(aside.camera.forward[1]).toBeCloseTo(first.camera.forward[1], 6);
+		expect(level(aside)).toBeCloseTo(level(first), 6);
+		await press(page, "ArrowUp", 40);
+		expect((await readStage(page)).camera.up[1]).toBeGreaterThanOrEqual(0);
+		await press(page, "Home");
+	});
+
 	test("comma and full stop step, from the end back and on again", async () => {
 		await page.evaluate(() => window.stageProbe?.setTime(99));
 		await press(page, ",", 3);
