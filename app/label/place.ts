@@ -125,11 +125,16 @@ export class LabelPlacer {
 		const l = Math.hypot(x - ox, y - oy);
 		const ux = l > 1 ? (x - ox) / l : 0;
 		const uy = l > 1 ? (y - oy) / l : 1;
-		const beside = label.width / 2 + BESIDE;
+		const flat = Math.abs(ux) > Math.abs(uy);
 		for (let tries = 0; tries < 10; tries++) {
+			const side = tries === 1 ? 1 : tries === 2 ? -1 : 0;
 			const reach = (tip ? Math.max(l, 14) + 4 : l) + 8 * Math.max(0, tries - 2);
-			const cx = tries === 1 ? x + beside : tries === 2 ? x - beside : ox + ux * (reach + label.width / 2 + 2);
-			const cy = tries === 1 || tries === 2 ? y : oy + uy * (reach + label.height / 2 + 1);
+			let cx = ox + ux * (reach + label.width / 2 + 2);
+			let cy = oy + uy * (reach + label.height / 2 + 1);
+			if (side !== 0) {
+				cx = flat ? Math.max(label.width / 2, Math.min(width - label.width / 2, x)) : x + side * (label.width / 2 + BESIDE);
+				cy = flat ? y - side * (label.height / 2 + BESIDE) : y;
+			}
 			if (this.clear(label, cx, cy, width, height)) {
 				this.show(label, cx, cy);
 				return;
